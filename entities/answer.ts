@@ -15,6 +15,8 @@ export const Answer = defineEntity({
     job: () => p.manyToOne(BalanceJob).ref(),
     number: p.integer(),
     kind: p.enum(['correction', 'trim'] as const),
+    /** The newest run the answer was computed from. */
+    afterRunNumber: p.integer(),
     method: p.string().length(60),
     inputs: p.json<unknown>(),
     result: p.json<unknown>(),

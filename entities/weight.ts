@@ -30,6 +30,8 @@ export const Weight = defineEntity({
     massG: p.double().$type<number>(),
     massSource: p.enum(['scale', 'nominal'] as const),
     purpose: p.enum(['trial', 'correction', 'found'] as const),
+    /** The answer this weight follows; null for trials and old weights. */
+    answerNumber: p.integer().nullable(),
     fixing: p.string().length(200),
     permanent: p.boolean().default(false),
     entered: p.json<EnteredAngle>(),

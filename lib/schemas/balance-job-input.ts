@@ -1,0 +1,178 @@
+import { z } from 'zod';
+import { id, optionalNumber, text, tick, typedNumber } from './number';
+
+const ids = z.preprocess(
+  (value: unknown): unknown =>
+    Array.isArray(value) ? value : value === undefined || value === '' ? [] : [value],
+  z.array(id),
+);
+
+/** A choice that must be made: nothing is chosen beforehand. */
+const choice = <const Options extends readonly [string, ...string[]]>(
+  options: Options,
+  message: string,
+) => z.enum(options, { error: message });
+
+const mustTick = (message: string) => tick.refine((ticked) => ticked, { error: message });
+
+const namedPerson = (what: string) => text(what, 120);
+
+export const AMPLITUDE_UNITS = ['mm/s rms', 'mm/s pk', 'in/s pk', 'µm p-p', 'mil p-p'] as const;
+export type AmplitudeUnit = (typeof AMPLITUDE_UNITS)[number];
+
+export const openBalanceJobInput = z
+  .object({
+    machineId: id,
+    kind: choice(['one-plane', 'two-plane'], 'Choose one or two correction planes.'),
+    planeIds: ids,
+    pointIds: ids,
+    unit: choice(['mm/s rms', 'µm p-p'], 'Choose what the 1x readings of this job are kept in.'),
+    phaseSense: choice(
+      ['lag', 'lead'],
+      'Say whether your instrument shows phase as lag or as lead.',
+    ),
+    angleSense: choice(
+      ['against', 'with'],
+      'Say which way you count degrees on this rotor: against or with rotation.',
+    ),
+    reason: text('why this rotor is balanced', 1000),
+    targetOneX: optionalNumber({ what: 'the 1x target', above: 0 }),
+    targetZone: z.enum(['A', 'B', '']).default(''),
+    gradeTarget: tick,
+    startsAllowed: optionalNumber({ what: 'the number of starts allowed', min: 1, max: 50 }),
+    setupConfirmed: mustTick(
+      'Look at the mark, the tacho and the sensors and confirm the set-up, or record a new set-up first.',
+    ),
+    standingSentence: mustTick('Read the caution and tick it.'),
+  })
+  .superRefine((job, context) => {
+    const wanted = job.kind === 'one-plane' ? 1 : 2;
+    if (new Set(job.planeIds).size !== wanted || job.planeIds.length !== wanted) {
+      const message = `Choose ${wanted === 1 ? 'one plane' : 'two planes'} for a ${job.kind} job.`;
+      context.addIssue({ code: 'custom', path: ['planeIds'], message });
+    }
+    if (job.pointIds.length < wanted) {
+      const message = `Choose at least ${wanted === 1 ? 'one point' : 'two points'} to read in every run.`;
+      context.addIssue({ code: 'custom', path: ['pointIds'], message });
+    }
+  });
+
+const runVectorInput = z
+  .object({
+    pointId: id,
+    recordId: z.union([z.literal('').transform(() => null), z.null(), id]).default(null),
+    amplitude: z.union([z.string(), z.number()]).default(''),
+    phaseDeg: z.union([z.string(), z.number()]).default(''),
+    overall: optionalNumber({ what: 'the overall velocity', unit: 'mm/s rms', min: 0, max: 1000 }),
+  })
+  .transform((vector, context) => {
+    if (vector.recordId !== null) return { ...vector, amplitude: 0, phaseDeg: 0 };
+    const amplitude = typedNumber({ what: 'the 1x size', min: 0, max: 100_000 }).safeParse(
+      vector.amplitude,
+    );
+    const phase = typedNumber({ what: 'the phase', unit: '°', min: 0, max: 360 }).safeParse(
+      vector.phaseDeg,
+    );
+    for (const [path, parsed] of [
+      ['amplitude', amplitude],
+      ['phaseDeg', phase],
+    ] as const) {
+      for (const issue of parsed.error?.issues ?? [])
+        context.addIssue({ code: 'custom', path: [path], message: issue.message });
+    }
+    if (!amplitude.success || !phase.success) return z.NEVER;
+    return { ...vector, amplitude: amplitude.data, phaseDeg: phase.data };
+  });
+
+export const recordRunInput = z.object({
+  jobId: id,
+  purpose: z.enum(['base', 'trial', 'check']),
+  speedRpm: typedNumber({ what: 'the speed', unit: 'r/min', above: 0, max: 200_000 }),
+  unit: z.enum(AMPLITUDE_UNITS),
+  vectors: z.array(runVectorInput).min(1, 'Enter the reading of every point.'),
+  clearOfRotor: mustTick(
+    'Before the start: people clear, tools out, locks off by their owners, guards back. Tick it when it is so.',
+  ),
+  namedPerson: namedPerson('who made sure that everybody is clear and the guards are back'),
+});
+
+export const acceptBaseInput = z.object({
+  jobId: id,
+  reason: z.string().trim().max(1000).default(''),
+});
+
+export const fitWeightInput = z.object({
+  jobId: id,
+  purpose: z.enum(['trial', 'correction']),
+  planeId: id,
+  positionId: z.union([z.literal('').transform(() => null), z.null(), id]).default(null),
+  massG: typedNumber({ what: 'the mass', unit: 'g', above: 0, max: 1_000_000 }),
+  massSource: choice(['scale', 'nominal'], 'Say whether the mass was weighed or is nominal.'),
+  radiusMm: typedNumber({ what: 'the radius', unit: 'mm', above: 0, max: 20_000 }),
+  angleDeg: z.union([
+    z.literal('').transform(() => null),
+    z.null(),
+    z.undefined().transform(() => null),
+    typedNumber({ what: 'the angle', unit: '°', min: 0, max: 360 }),
+  ]),
+  angleSense: z.enum(['against', 'with', '']).default(''),
+  arcMm: optionalNumber({ what: 'the arc along the rim', unit: 'mm', min: 0 }),
+  fixing: text('how the weight is fixed', 200),
+  standingStill: mustTick(
+    'Hands on the rotor only when it stands still and every energy source is locked out. Tick it when it is so.',
+  ),
+  fixingHolds: mustTick('Check mass, fixing and force, then tick it.'),
+  namedPerson: namedPerson('who locked the machine out'),
+});
+
+export const settleTrialInput = z.object({
+  jobId: id,
+  weightId: id,
+  stays: choice(['taken off', 'stays on'], 'Say whether this weight is still on the rotor.'),
+  standingStill: mustTick(
+    'Look at the rotor only when it stands still and is locked out. Tick it.',
+  ),
+  namedPerson: namedPerson('who locked the machine out'),
+});
+
+export const takeOffWeightInput = z.object({
+  jobId: id,
+  weightId: id,
+  reason: text('why the weight is taken off', 400),
+  standingStill: mustTick(
+    'Hands on the rotor only when it stands still and is locked out. Tick it.',
+  ),
+  namedPerson: namedPerson('who locked the machine out'),
+});
+
+export const acceptAnswerInput = z.object({
+  jobId: id,
+  /** Fingerprint of the answer the person looked at, so that an older one is never accepted. */
+  fingerprint: z.string().min(1),
+});
+
+export const lineThroughRunInput = z.object({
+  jobId: id,
+  runId: id,
+  reason: text('what went wrong in this run', 1000),
+});
+
+export const stopJobInput = z.object({
+  jobId: id,
+  outcome: choice(['stopped safe', 'not a balance job'], 'Say how the job ends.'),
+  reason: text('why the job stops here', 1000),
+  rotorState: text('what is on the rotor now', 1000),
+  safe: mustTick('Leave the machine safe, then tick it.'),
+});
+
+export const signJobInput = z.object({
+  jobId: id,
+  statement: text('your statement', 1000),
+  permanentWeightIds: ids,
+  handBack: mustTick(
+    'Tools counted, temporary weights gone or made permanent, guards on, locks removed by their owners, area owner told: tick it when it is so.',
+  ),
+  areaOwner: namedPerson('the area owner who takes the machine back'),
+  /** Needed where a target is missed or a prediction was missed. */
+  reason: z.string().trim().max(1000).default(''),
+});
