@@ -40,6 +40,8 @@ export function radPerSFromRpm(speed: Rpm): number {
  * Example: `normaliseDeg(-10)` is 350, `normaliseDeg(720)` is 0.
  */
 export function normaliseDeg(deg: number): number {
+  // In range already: handed back bit for bit (and −0 as 0).
+  if (deg >= 0 && deg < 360) return deg + 0;
   const turned = ((deg % 360) + 360) % 360;
   return turned === 360 ? 0 : turned;
 }

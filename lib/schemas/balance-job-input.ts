@@ -157,6 +157,12 @@ export const lineThroughRunInput = z.object({
   reason: text('what went wrong in this run', 1000),
 });
 
+export const keepRunInput = z.object({
+  jobId: id,
+  runId: id,
+  reason: text('why this run may be used', 1000),
+});
+
 export const stopJobInput = z.object({
   jobId: id,
   outcome: choice(['stopped safe', 'not a balance job'], 'Say how the job ends.'),

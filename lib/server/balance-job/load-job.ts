@@ -1,0 +1,70 @@
+import 'server-only';
+import type { EntityManager, Loaded } from '@mikro-orm/postgresql';
+import { Answer } from '@/entities/answer';
+import { JobPlane, JobPoint, Run, RunVector, type BalanceJob } from '@/entities/balance-job';
+import type { Point } from '@/entities/bearing';
+import type { Plane } from '@/entities/rotor';
+import { Weight } from '@/entities/weight';
+import { nextStep, type Step } from '@/lib/domain/balance-job/next-step';
+
+export type LoadedRun = { run: Run; vectors: RunVector[] };
+
+/** A job with everything its arithmetic and its order of work depend on. */
+export type LoadedJob = {
+  job: BalanceJob;
+  planes: Plane[];
+  points: Point[];
+  runs: LoadedRun[];
+  /** Every weight fitted in this job, ended ones too, in the order fitted. */
+  weights: Loaded<Weight, 'plane' | 'position' | 'fittedBy' | 'endedBy'>[];
+  answers: Answer[];
+  step: Step;
+};
+
+/** Loads what hangs on a job, in a fixed number of statements. */
+export async function loadJob(em: EntityManager, job: BalanceJob): Promise<LoadedJob> {
+  const order = { orderBy: { order: 'asc' } } as const;
+  const planes = await em.find(JobPlane, { job: job.id }, { ...order, populate: ['plane'] });
+  const points = await em.find(JobPoint, { job: job.id }, { ...order, populate: ['point'] });
+  const runs = await em.find(Run, { job: job.id }, { orderBy: { number: 'asc' } });
+  const vectors = await em.find(RunVector, { run: { job: job.id } }, { orderBy: { id: 'asc' } });
+  const weights = await em.find(
+    Weight,
+    { job: job.id },
+    { orderBy: { id: 'asc' }, populate: ['plane', 'position', 'fittedBy', 'endedBy'] },
+  );
+  const answers = await em.find(Answer, { job: job.id }, { orderBy: { number: 'asc' } });
+  const loaded = {
+    job,
+    planes: planes.map(({ plane }) => plane.$),
+    points: points.map(({ point }) => point.$),
+    runs: runs.map((run) => ({ run, vectors: vectors.filter((v) => v.run.id === run.id) })),
+    weights,
+    answers,
+  };
+  return { ...loaded, step: stepOf(loaded) };
+}
+
+function stepOf(loaded: Omit<LoadedJob, 'step'>): Step {
+  const newest = loaded.answers.at(-1);
+  return nextStep({
+    state: loaded.job.state,
+    planeIds: loaded.planes.map((plane) => plane.id),
+    runs: loaded.runs.map(({ run }) => ({
+      number: run.number,
+      purpose: run.purpose,
+      state: run.state,
+      weightIds: run.weightsState.map((weight) => weight.weightId),
+    })),
+    weights: loaded.weights.map((weight) => ({
+      id: weight.id,
+      planeId: weight.plane.id,
+      purpose: weight.purpose,
+      on: weight.endedAt === null,
+      stays: weight.stays ?? null,
+      answerNumber: weight.answerNumber ?? null,
+    })),
+    answerNumber: newest?.number ?? null,
+    answerAfterRun: newest?.afterRunNumber ?? null,
+  });
+}
