@@ -97,11 +97,12 @@ function markOf(
 
 function columnsOf(table: HeadTable, mark: DecimalMark | null): LayoutColumn[] {
   // A delimiter behind the last name or the last value adds a cell, not a column that is missing.
-  const named = (table.header?.cells ?? []).findLastIndex((cell) => cell.trim() !== '') + 1;
-  const width = Math.max(usualWidth(table.rows), named);
+  const names = (table.header?.cells ?? []).findLastIndex((cell) => cell.trim() !== '') + 1;
+  const width = Math.max(usualWidth(table.rows), names);
   const meanings = Array.from({ length: width }, (_, i): ColumnMeaning | null => {
     const name = table.header?.cells[i] ?? '';
-    return columnMeaning(name) ?? meaningOfValues(valuesOf(table, i, mark), i);
+    const named = columnMeaning(name);
+    return named ?? (width > 1 ? meaningOfValues(valuesOf(table, i, mark), i) : null);
   });
   const signal = chosenSignal(meanings);
   return meanings.map((meaning, index): LayoutColumn => {
@@ -129,6 +130,7 @@ function chosenSignal(meanings: readonly (ColumnMeaning | null)[]): number {
 function valuesOf(table: HeadTable, column: number, mark: DecimalMark | null): number[] {
   return table.rows.map(({ cells }) => {
     const cell = cells[column] ?? '';
+    if (cell.trim() === '') return NaN;
     return Number(mark === 'comma' ? cell.replace(',', '.') : cell);
   });
 }
