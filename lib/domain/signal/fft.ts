@@ -44,19 +44,23 @@ function isPowerOfTwo(n: number): boolean {
 
 const plans = new Map<number, FFT>();
 const LARGEST_KEPT_PLAN = 2 ** 17;
+let latestLargePlan: FFT | null = null;
 
-// A plan is a table of sines that depends on the length alone; at most 17 lengths are ever kept.
+// A plan is a table of sines that depends on the length alone: the 17 small ones and the latest
+// large one are kept, because the chirp transform asks for the same large one three times.
 function planFor(n: number): FFT {
-  const known = plans.get(n);
-  if (known !== undefined) return known;
+  const known = n > LARGEST_KEPT_PLAN ? latestLargePlan : plans.get(n);
+  if (known?.size === n) return known;
   const plan = new FFT(n);
-  if (n <= LARGEST_KEPT_PLAN) plans.set(n, plan);
+  if (n > LARGEST_KEPT_PLAN) latestLargePlan = plan;
+  else plans.set(n, plan);
   return plan;
 }
 
-// Plain arrays are the faster storage for this kernel, until the engine would make them sparse.
+// Plain arrays are the faster storage for this kernel, until collecting them costs more than they
+// save. Filling with a fraction tells the engine at once that they hold doubles.
 function storage(length: number): number[] | Float64Array {
-  return length > 2 ** 23 ? new Float64Array(length) : new Array<number>(length).fill(0);
+  return length > 2 ** 17 ? new Float64Array(length) : new Array<number>(length).fill(0.5);
 }
 
 function radixFft(re: Float64Array, im: Float64Array): ComplexLines {

@@ -7,7 +7,7 @@ import type { Failure, Result } from '../result';
 import { soundEdges, type SoundEdges } from './sound-edges';
 import { tachoEdges } from './tacho-edges';
 import { tachoSpeed } from './tacho-speed';
-import { toneSizeRms } from './tone-size';
+import { toneSizesRms } from './tone-size';
 import type { VelocityOrder, WaveformInput } from './waveform-input';
 
 /** Where a speed came from: the tacho, a line found near the stated speed, or the statement alone. */
@@ -77,7 +77,7 @@ function ordersWithTacho(input: WaveformInput, { edgesS, repair }: SoundEdges): 
 }
 
 function ordersWithoutTacho(input: WaveformInput, spectrum: AmplitudeSpectrum): ShaftOrders {
-  const { samples, sampleRateHz, quantity, speedRpm } = input;
+  const { samples, sampleRateHz, speedRpm } = input;
   const nothing = { speedSpreadPct: null, tacho: null, tachoFault: null };
   if (speedRpm === undefined) {
     const unknown = { speedRpm: null, speedSource: null, turns: null, oneX: null, harmonics: [] };
@@ -85,12 +85,7 @@ function ordersWithoutTacho(input: WaveformInput, spectrum: AmplitudeSpectrum): 
   }
   const foundHz = shaftLineNear(spectrum, speedRpm / 60);
   const shaftHz = foundHz ?? speedRpm / 60;
-  const harmonics = Array.from({ length: HIGHEST_ORDER }, (_, i): VelocityOrder => {
-    const frequencyHz = (i + 1) * shaftHz;
-    const size = toneSizeRms(samples, sampleRateHz, frequencyHz);
-    const amplitudeRmsMmS = size * sizeFactor(quantity, 'velocity', frequencyHz);
-    return { order: i + 1, frequencyHz, amplitudeRmsMmS, lagDeg: null, scatterRmsMmS: null };
-  }).filter(({ frequencyHz }) => frequencyHz < sampleRateHz / 2);
+  const harmonics = sizesAt(input, shaftHz);
   return {
     ...nothing,
     speedRpm: rpm(foundHz === null ? speedRpm : 60 * foundHz),
@@ -99,6 +94,21 @@ function ordersWithoutTacho(input: WaveformInput, spectrum: AmplitudeSpectrum): 
     oneX: harmonics[0] ?? null,
     harmonics,
   };
+}
+
+function sizesAt(input: WaveformInput, shaftHz: number): VelocityOrder[] {
+  const { samples, sampleRateHz, quantity } = input;
+  const frequenciesHz = Array.from({ length: HIGHEST_ORDER }, (_, i) => (i + 1) * shaftHz).filter(
+    (frequencyHz) => frequencyHz < sampleRateHz / 2,
+  );
+  const sizes = toneSizesRms(samples, sampleRateHz, frequenciesHz);
+  return frequenciesHz.map((frequencyHz, i) => ({
+    order: i + 1,
+    frequencyHz,
+    amplitudeRmsMmS: (sizes[i] ?? 0) * sizeFactor(quantity, 'velocity', frequencyHz),
+    lagDeg: null,
+    scatterRmsMmS: null,
+  }));
 }
 
 function shaftLineNear(spectrum: AmplitudeSpectrum, statedHz: number): number | null {

@@ -18,10 +18,12 @@ const COSINE_TERMS: Readonly<Record<WindowKind, readonly number[]>> = {
  * Example: `windowOf('hann', 4)` is `[0, 0.5, 1, 0.5]`.
  */
 export function windowOf(kind: WindowKind, n: number): Float64Array {
-  const terms = COSINE_TERMS[kind];
-  return Float64Array.from({ length: n }, (_, i) =>
-    terms.reduce((sum, a, m) => sum + a * Math.cos((2 * Math.PI * ((m * i) % n)) / n), 0),
-  );
+  const window = new Float64Array(n);
+  COSINE_TERMS[kind].forEach((a, m) => {
+    if (m === 0) window.fill(a);
+    else addCosine(window, a, m);
+  });
+  return window;
 }
 
 /** Coherent gain `Σw/N`, by which line sizes are divided. Example: 0.5 for Hann. */
@@ -36,6 +38,13 @@ export function coherentGain(window: Float64Array): number {
 export function enbwBins(window: Float64Array): number {
   const sum = sumOf(window);
   return (window.length * window.reduce((total, w) => total + w * w, 0)) / (sum * sum);
+}
+
+function addCosine(window: Float64Array, a: number, m: number): void {
+  const n = window.length;
+  for (let i = 0; i < n; i++) {
+    window[i] = (window[i] ?? 0) + a * Math.cos((2 * Math.PI * ((m * i) % n)) / n);
+  }
 }
 
 function sumOf(window: Float64Array): number {

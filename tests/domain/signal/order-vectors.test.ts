@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { orderVectors } from '@/lib/domain/signal/order-vectors';
 import { solveLinear } from '@/lib/domain/signal/solve-linear';
-import { toneSizeRms } from '@/lib/domain/signal/tone-size';
+import { toneSizesRms } from '@/lib/domain/signal/tone-size';
 import { shortTurnDeg } from '@/lib/domain/units';
 
 const radians = (deg: number): number => (deg * Math.PI) / 180;
@@ -80,7 +80,7 @@ describe('tone size', () => {
       { length: 1024 },
       (_, i) => 5 * Math.cos((2 * Math.PI * 25.3 * i) / 1024 + 1) + 7,
     );
-    expect(toneSizeRms(samples, 1024, 25.3)).toBeCloseTo(5 / Math.SQRT2, 3);
+    expect(toneSizesRms(samples, 1024, [25.3])[0]).toBeCloseTo(5 / Math.SQRT2, 3);
   });
 });
 
