@@ -13,6 +13,10 @@ export default {
       sheet: token('sheet'),
       ink: { DEFAULT: token('ink'), soft: token('ink-soft') },
       rule: token('rule'),
+      edge: token('edge'),
+      fault: token('fault'),
+      disc: token('disc'),
+      scribe: token('scribe'),
       blue: { DEFAULT: token('blue'), wash: token('blue-wash'), on: token('blue-on') },
       brass: { DEFAULT: token('brass'), line: token('brass-line') },
       zone: {
@@ -20,6 +24,10 @@ export default {
         b: token('zone-b'),
         c: token('zone-c'),
         d: token('zone-d'),
+        'a-on': token('zone-a-on'),
+        'b-on': token('zone-b-on'),
+        'c-on': token('zone-c-on'),
+        'd-on': token('zone-d-on'),
       },
     },
     fontSize: {
