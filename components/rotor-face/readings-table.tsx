@@ -1,0 +1,29 @@
+import { formatLag, formatQuantity } from '@/lib/format';
+import type { FaceReadings } from './face-types';
+
+/** The vectors of the drawing as a table, for those who do not see it. */
+export function ReadingsTable({ readings }: { readings: FaceReadings }) {
+  return (
+    <div className="sr-only">
+      <table>
+        <caption>1x at {readings.point}, in the order of the runs</caption>
+        <thead>
+          <tr>
+            <th scope="col">run</th>
+            <th scope="col">size</th>
+            <th scope="col">phase</th>
+          </tr>
+        </thead>
+        <tbody>
+          {readings.vectors.map((vector) => (
+            <tr key={vector.label}>
+              <th scope="row">{vector.label}</th>
+              <td>{formatQuantity(vector.amplitude, readings.unit)}</td>
+              <td>{formatLag(vector.lagDeg)}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
