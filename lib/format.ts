@@ -199,6 +199,24 @@ export const END_WORDS = {
   'other-end': 'seen from the other end',
 } as const;
 
+/** Labels of a number axis, all with the decimals that its step needs. */
+export function formatTick(
+  value: number,
+  stepSize: number,
+  decimalMark: DecimalMark = '.',
+): string {
+  const decimals = stepSize > 0 ? Math.max(0, Math.ceil(-Math.log10(stepSize) - 1e-9)) : 0;
+  return formatNumber(value, { decimals: Math.min(decimals, 9), decimalMark });
+}
+
+/** Labels of a time axis: hours on the site's clock, days, or months, as the span asks for. */
+export function formatTimeTick(at: Instant, spanMs: number, timeZone: string): string {
+  if (spanMs < 2 * DAY_LENGTH) return dateText(at, timeZone, CLOCK);
+  // Ticks of days and months stand at midnight UTC; read elsewhere they would name the day before.
+  if (spanMs < 120 * DAY_LENGTH) return dateText(at, 'UTC', { day: 'numeric', month: 'short' });
+  return dateText(at, 'UTC', { month: 'short', year: '2-digit' });
+}
+
 /** “1 weight”, “3 weights”. */
 export function formatPlural(count: number, one: string, many = `${one}s`): string {
   return `${count}${NO_BREAK}${count === 1 ? one : many}`;

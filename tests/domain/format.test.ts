@@ -117,6 +117,25 @@ describe('dates', () => {
   });
 });
 
+describe('axes', () => {
+  it('have the decimals their step needs', () => {
+    expect(format.formatTick(1.5, 0.5)).toBe('1.5');
+    expect(format.formatTick(20, 10)).toBe('20');
+    expect(format.formatTick(0.05, 0.01, ',')).toBe('0,05');
+  });
+
+  it('name hours on the site’s clock, and days and months by their own midnight', () => {
+    const day = 86_400_000;
+    expect(format.formatTimeTick('2026-02-01T00:00:00Z', day, 'America/New_York')).toBe('19:00');
+    expect(format.formatTimeTick('2026-02-01T00:00:00Z', 30 * day, 'America/New_York')).toBe(
+      '1 Feb',
+    );
+    expect(format.formatTimeTick('2026-02-01T00:00:00Z', 400 * day, 'America/New_York')).toBe(
+      'Feb 26',
+    );
+  });
+});
+
 describe('words', () => {
   it('name zones and roles', () => {
     expect(format.formatZone('C')).toBe('C, put right soon');
