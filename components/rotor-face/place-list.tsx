@@ -40,7 +40,7 @@ function Ways({ plane, angleDeg }: { plane: FacePlane; angleDeg: number }) {
   return (
     <>
       <span className="font-semibold text-ink">{formatRotorAngle(angleDeg)}</span> ={' '}
-      <span className="font-semibold text-ink">{arc}</span> along the rim at r{' '}
+      <span className="font-semibold text-ink">{arc}</span> along the rim at r&nbsp;
       {formatQuantity(plane.radiusMm, 'mm')}
       {words.kind === 'at' && (
         <>

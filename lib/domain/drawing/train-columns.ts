@@ -43,7 +43,8 @@ export function trainBodies<Bearing extends { readonly part: TrainPart }>(
   });
 }
 
-function partOf<Bearing extends { readonly part: TrainPart }>(
+/** The part of the train that a column belongs to. */
+export function partOf<Bearing extends { readonly part: TrainPart }>(
   column: TrainColumn<Bearing>,
 ): TrainPart {
   return column.kind === 'body' ? column.part : column.bearing.part;
