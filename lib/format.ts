@@ -214,7 +214,7 @@ export function formatTimeTick(at: Instant, spanMs: number, timeZone: string): s
   if (spanMs < 2 * DAY_LENGTH) return dateText(at, timeZone, CLOCK);
   // Ticks of days and months stand at midnight UTC; read elsewhere they would name the day before.
   if (spanMs < 120 * DAY_LENGTH) return dateText(at, 'UTC', { day: 'numeric', month: 'short' });
-  return dateText(at, 'UTC', { month: 'short', year: '2-digit' });
+  return dateText(at, 'UTC', { month: 'short', year: 'numeric' });
 }
 
 /** “1 weight”, “3 weights”. */

@@ -58,7 +58,8 @@ export function SpectrumChart({ title, curve, speedRpm, marks = [], zoom }: Spec
           return (
             <>
               <SpectrumPlot
-                {...{ width, box, curve, view, turnHz, cursorHz }}
+                {...{ width, box, curve, view, turnHz }}
+                cursor={{ hz: cursorHz, value: curve.values[index] ?? 0 }}
                 shown={range.shown}
                 unit={title.unit}
                 harmonicsHz={harmonicsFrom(view, marks, cursorHz)}

@@ -35,18 +35,16 @@ export function SpectrumControls({ view, onView, marks, withOrders }: SpectrumCo
       </select>
       <Button
         variant="quiet"
-        aria-pressed={view.y === 'log'}
         onClick={() => onView({ ...view, y: view.y === 'log' ? 'linear' : 'log' })}
       >
-        {view.y === 'log' ? 'Linear' : 'Log'}
+        {view.y === 'log' ? 'Linear scale' : 'Log scale'}
       </Button>
       {withOrders && (
         <Button
           variant="quiet"
-          aria-pressed={view.x === 'orders'}
           onClick={() => onView({ ...view, x: view.x === 'Hz' ? 'orders' : 'Hz' })}
         >
-          {view.x === 'Hz' ? 'Orders' : 'Hz'}
+          {view.x === 'Hz' ? 'In orders' : 'In Hz'}
         </Button>
       )}
     </>

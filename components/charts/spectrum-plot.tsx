@@ -21,14 +21,14 @@ type SpectrumPlotProps = {
   unit: string;
   /** Frequency of one turn; null where the speed is not known. */
   turnHz: number | null;
-  cursorHz: number;
+  cursor: { hz: number; value: number };
   /** First of the harmonic cursors; null where they are off. */
   harmonicsHz: number | null;
 };
 
 /** Lines of a spectrum, reduced to the width by their largest, so that no peak is lost. */
 export function SpectrumPlot(props: SpectrumPlotProps) {
-  const { width, box, curve, shown, view, unit, turnHz, cursorHz, harmonicsHz } = props;
+  const { width, box, curve, shown, view, unit, turnHz, cursor, harmonicsHz } = props;
   const range = { from: nearestIndex(curve.hz, shown.from), to: nearestIndex(curve.hz, shown.to) };
   const lines = columnMaxima(curve.values, range, Math.max(1, Math.floor(box.width)));
   const top = lines.reduce((most, { value }) => Math.max(most, value), 0) || 1;
@@ -53,14 +53,24 @@ export function SpectrumPlot(props: SpectrumPlotProps) {
       {harmonicsHz !== null && (
         <Multiples {...{ x, box, shown }} of={harmonicsHz} most={MOST_HARMONICS} kind="harmonic" />
       )}
-      <line
-        x1={x(cursorHz)}
-        x2={x(cursorHz)}
-        y1={box.top}
-        y2={bottom}
-        className="no-print stroke-blue"
-        strokeWidth={1.5}
-      />
+      {cursor.hz >= shown.from && cursor.hz <= shown.to && (
+        <g className="no-print stroke-blue">
+          <line
+            x1={x(cursor.hz)}
+            x2={x(cursor.hz)}
+            y1={box.top}
+            y2={bottom}
+            strokeDasharray="2 2"
+          />
+          <circle
+            cx={x(cursor.hz)}
+            cy={y.of(cursor.value)}
+            r={3.5}
+            className="fill-sheet"
+            strokeWidth={2}
+          />
+        </g>
+      )}
     </svg>
   );
 }

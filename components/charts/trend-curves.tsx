@@ -15,7 +15,7 @@ type TrendCurvesProps = Scales & { box: PlotBox; model: TrendModel; breaks: read
 export function TrendCurves({ box, model, breaks, x, y }: TrendCurvesProps) {
   const ends = model.series.map((series) => lastValue(series));
   const heights = spreadApart(
-    ends.map((end) => y(end?.value ?? 0) - 9),
+    ends.map((end, i) => y(end?.value ?? 0) + (i === 0 ? -9 : 17)),
     14,
     { min: box.top + 10, max: box.top + box.height - 4 },
   );

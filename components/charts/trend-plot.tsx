@@ -53,7 +53,7 @@ export function TrendPlot(props: TrendPlotProps) {
       <XAxis
         box={box}
         scale={x}
-        ticks={timeTicks(shown, Math.max(2, Math.floor(box.width / 90)))}
+        ticks={timeTicks(shown, Math.max(3, Math.floor(box.width / 90)))}
         tickText={(value) => formatTimeTick(value, span, site.timeZone)}
       />
       <LimitLines box={box} y={y} limits={limits} />

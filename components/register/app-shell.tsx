@@ -38,7 +38,7 @@ export function AppShell({ person, sites, siteId, inTrayCount, actions, children
             <Wordmark />
           </Link>
           <Navigation inTrayCount={inTrayCount} />
-          <div className="ml-auto flex flex-wrap items-center gap-1">
+          <div className="flex w-full flex-wrap items-center justify-between gap-1 xl:ml-auto xl:w-auto">
             <SiteSwitch sites={sites} siteId={siteId} action={actions.switchSite} />
             <FindMachine />
             <AccountMenu person={person} signOut={actions.signOut} />

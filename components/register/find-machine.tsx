@@ -25,7 +25,12 @@ export function FindMachine() {
           type="button"
           className="target flex cursor-pointer items-center gap-2 px-2 text-ink-soft hover:text-ink"
         >
-          find a machine <KeyCap>/</KeyCap>
+          <span>
+            find <span className="max-sm:sr-only">a machine</span>
+          </span>
+          <span className="max-sm:hidden">
+            <KeyCap>/</KeyCap>
+          </span>
         </button>
       }
     >

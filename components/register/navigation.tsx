@@ -17,14 +17,14 @@ export function Navigation({ inTrayCount }: { inTrayCount: number }) {
         aria-expanded={open}
         aria-controls="places"
         onClick={() => setOpenAt(open ? null : pathname)}
-        className="target order-last cursor-pointer rounded border border-edge px-3 font-semibold xl:hidden"
+        className="target ml-auto cursor-pointer rounded border border-edge px-3 font-semibold xl:hidden"
       >
         Menu
       </button>
       <nav
         id="places"
         aria-label="Places"
-        className={`order-last w-full xl:order-none xl:block xl:w-auto ${open ? 'block' : 'hidden'}`}
+        className={`w-full xl:order-none xl:block xl:w-auto ${open ? 'block' : 'hidden'}`}
       >
         <ul className="flex flex-col xl:flex-row xl:gap-5">
           {PLACES.map((place) => (

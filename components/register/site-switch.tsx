@@ -22,7 +22,7 @@ export function SiteSwitch({ sites, siteId, action }: SiteSwitchProps) {
         aria-label="Site"
         defaultValue={siteId ?? ''}
         onChange={(event) => event.currentTarget.form?.requestSubmit()}
-        className="target cursor-pointer rounded border border-transparent bg-sheet px-2 hover:border-edge"
+        className="target max-w-40 cursor-pointer truncate rounded border border-transparent bg-sheet px-2 hover:border-edge"
       >
         <option value="">All sites</option>
         {sites.map((site) => (

@@ -38,9 +38,12 @@ export function MachineTrain({ name, bearings, overhung, drive }: MachineTrainPr
       role="region"
       aria-label={`Side view of ${name}`}
       tabIndex={0}
-      className="overflow-x-auto print:overflow-visible"
+      className="relative overflow-x-auto print:overflow-visible"
     >
-      <div style={{ minWidth: `${columns.length * 4.75}rem` }} className="mx-auto max-w-4xl">
+      <div
+        className="mx-auto"
+        style={{ minWidth: `${columns.length * 4.75}rem`, maxWidth: `${columns.length * 9}rem` }}
+      >
         <TrainDrawing
           columns={columns.map((column) => ({
             part: partOf(column),

@@ -39,9 +39,9 @@ function middle(index: number): number {
 
 function Body({ body }: { body: TrainBody }) {
   const alone = body.from === body.to;
-  const x = alone ? body.from * COLUMN + 18 : middle(body.from) + 16;
-  const width = alone ? COLUMN - 36 : middle(body.to) - middle(body.from) - 32;
-  const [top, height] = body.part === 'driven' ? [8, 88] : [22, 60];
+  const x = alone ? body.from * COLUMN + 20 : middle(body.from) + 21;
+  const width = alone ? COLUMN - 40 : middle(body.to) - middle(body.from) - 42;
+  const [top, height] = body.part === 'driven' ? [10, 84] : [22, 60];
   if (body.part === 'driven') {
     return (
       <g className="stroke-ink">

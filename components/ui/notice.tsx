@@ -7,10 +7,10 @@ type NoticeProps = {
 };
 
 const LOOKS = {
-  info: { edge: 'border-blue', sign: 'i', word: 'Note' },
-  success: { edge: 'border-blue', sign: '✓', word: 'Done' },
-  caution: { edge: 'border-ink', sign: '!', word: 'Mind' },
-  failure: { edge: 'border-fault', sign: '▲', word: 'Failed' },
+  info: { edge: 'border-l-blue', sign: 'i', word: 'Note' },
+  success: { edge: 'border-l-blue', sign: '✓', word: 'Done' },
+  caution: { edge: 'border-l-ink', sign: '!', word: 'Mind' },
+  failure: { edge: 'border-l-fault', sign: '▲', word: 'Failed' },
 } as const;
 
 /** Something to know about what stands beside it. Not for safety: that is `Caution`. */

@@ -16,12 +16,17 @@ export function ProgressBar({ label, done, of, text }: ProgressBarProps) {
         <span className="truncate">{label}</span>
         <span className="figures whitespace-nowrap text-ink-soft">{text}</span>
       </div>
-      <progress
-        className="h-2 w-full overflow-hidden rounded border border-edge accent-blue"
+      <div
+        role="progressbar"
         aria-label={label}
-        value={share}
-        max={1}
-      />
+        aria-valuemin={0}
+        aria-valuemax={100}
+        aria-valuenow={Math.round(share * 100)}
+        aria-valuetext={text}
+        className="h-2 overflow-hidden rounded border border-edge"
+      >
+        <div className="h-full bg-blue" style={{ width: `${share * 100}%` }} />
+      </div>
     </div>
   );
 }

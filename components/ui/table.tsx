@@ -17,7 +17,7 @@ export function Table({ caption, captionShown = false, roomy = false, children }
       role="region"
       aria-label={caption}
       tabIndex={0}
-      className="-mx-1 overflow-x-auto px-1 print:overflow-visible"
+      className="relative -mx-1 overflow-x-auto px-1 print:overflow-visible"
     >
       <table
         className={`w-full border-collapse text-sm ${roomy ? '[&_td]:h-12 [&_tbody_th]:h-12' : '[&_td]:h-9 [&_tbody_th]:h-9'}`}

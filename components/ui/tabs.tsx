@@ -5,7 +5,7 @@ export type Tab = { href: string; label: string; count?: number; current: boolea
 /** Views of one thing. Each is a link, so that the address holds which one is open. */
 export function Tabs({ label, tabs }: { label: string; tabs: readonly Tab[] }) {
   return (
-    <nav aria-label={label} className="no-print overflow-x-auto border-b border-rule">
+    <nav aria-label={label} className="no-print relative overflow-x-auto border-b border-rule">
       <ul className="flex gap-1">
         {tabs.map((tab) => (
           <li key={tab.href}>

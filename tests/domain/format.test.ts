@@ -131,7 +131,7 @@ describe('axes', () => {
       '1 Feb',
     );
     expect(format.formatTimeTick('2026-02-01T00:00:00Z', 400 * day, 'America/New_York')).toBe(
-      'Feb 26',
+      'Feb 2026',
     );
   });
 });
