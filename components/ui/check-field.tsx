@@ -32,9 +32,9 @@ export function CheckField({
     <div>
       <label className="target flex cursor-pointer items-start gap-2.5 py-1.5">
         <input
+          key={String(ticked)}
           {...rest}
           {...start}
-          key={String(ticked)}
           type="checkbox"
           name={name}
           aria-invalid={error !== undefined || undefined}

@@ -38,9 +38,9 @@ export function SelectField({
     <FieldFrame id={id} label={label} hint={hint} error={error}>
       {/* The key makes React show what was chosen before a failed action cleared the form. */}
       <select
+        key={start}
         {...rest}
         {...uncontrolled}
-        key={start}
         id={id}
         name={name}
         aria-invalid={error !== undefined || undefined}

@@ -54,10 +54,19 @@ export function clockHours(rotorAngleDeg: number, seenTurning: Sense): number {
 
 /**
  * From polar to SVG: `degFromTop` degrees clockwise from straight up, at `radius` round `centre`.
+ * Rounded to a thousandth, because sines differ in their last digit between JavaScript engines and a
+ * server must draw exactly what the browser draws.
  *
- * Example: `polarPlace({ x: 0, y: 0 }, 10, 90)` is `{ x: 10, y: 0 }` within rounding.
+ * Example: `polarPlace({ x: 0, y: 0 }, 10, 90)` is `{ x: 10, y: 0 }`.
  */
 export function polarPlace(centre: Place, radius: number, degFromTop: number): Place {
   const angle = (degFromTop * Math.PI) / 180;
-  return { x: centre.x + radius * Math.sin(angle), y: centre.y - radius * Math.cos(angle) };
+  return {
+    x: thousandths(centre.x + radius * Math.sin(angle)),
+    y: thousandths(centre.y - radius * Math.cos(angle)),
+  };
+}
+
+function thousandths(value: number): number {
+  return Math.round(value * 1000) / 1000 + 0;
 }
