@@ -1,3 +1,5 @@
+import type { DecimalMark } from '@/lib/format';
+
 /** Said above every chart: quantity, unit with detection, point, date. */
 export type ChartTitle = {
   /** “Overall velocity”. */
@@ -8,6 +10,8 @@ export type ChartTitle = {
   point: string;
   /** “3 Feb 2026, 14:05 CET”, or the period. */
   date?: string;
+  /** Of the site; a point where left out. */
+  decimalMark?: DecimalMark;
 };
 
 /** The stretch of the x axis in sight. */

@@ -6,7 +6,7 @@ import { highestPeaks } from '@/lib/domain/drawing/spectrum-lines';
 import { formatNumber, formatQuantity } from '@/lib/format';
 import { ChartFrame } from './chart-frame';
 import { shareToX } from './chart-scales';
-import { titleText, type ChartRange, type ChartTitle } from './chart-types';
+import type { ChartRange, ChartTitle } from './chart-types';
 import { PeaksTable } from './peaks-table';
 import { PlotSurface } from './plot-surface';
 import { SpectrumControls } from './spectrum-controls';
@@ -35,7 +35,7 @@ export function SpectrumChart({ title, curve, speedRpm, marks = [], zoom }: Spec
   const turnHz = speedRpm ? speedRpm / 60 : null;
   const index = wanted === null ? highestLine(curve) : nearestIndex(curve.hz, wanted);
   const cursorHz = curve.hz[index] ?? 0;
-  const text = readout(curve, index, title.unit, turnHz);
+  const text = readout(curve, index, title, turnHz);
   const fromShare = (share: number) => shareToX(share, range.shown);
   return (
     <>
@@ -58,10 +58,9 @@ export function SpectrumChart({ title, curve, speedRpm, marks = [], zoom }: Spec
           return (
             <>
               <SpectrumPlot
-                {...{ width, box, curve, view, turnHz }}
+                {...{ title, width, box, curve, view, turnHz }}
                 cursor={{ hz: cursorHz, value: curve.values[index] ?? 0 }}
                 shown={range.shown}
-                unit={title.unit}
                 harmonicsHz={harmonicsFrom(view, marks, cursorHz)}
               />
               <PlotSurface
@@ -77,7 +76,7 @@ export function SpectrumChart({ title, curve, speedRpm, marks = [], zoom }: Spec
           );
         }}
       </ChartFrame>
-      <PeaksTable {...{ curve, turnHz }} unit={title.unit} title={titleText(title)} />
+      <PeaksTable {...{ curve, turnHz, title }} />
     </>
   );
 }
@@ -96,9 +95,15 @@ function harmonicsFrom(view: SpectrumView, marks: readonly SpectrumMark[], curso
   return hz > 0 ? hz : null;
 }
 
-function readout(curve: SpectrumCurve, index: number, unit: string, turnHz: number | null): string {
+function readout(
+  curve: SpectrumCurve,
+  index: number,
+  { unit, decimalMark }: ChartTitle,
+  turnHz: number | null,
+): string {
   const hz = curve.hz[index] ?? 0;
-  const order = turnHz === null ? '' : ` · order ${formatNumber(hz / turnHz, { decimals: 2 })}`;
-  const frequency = formatQuantity(hz, 'Hz', { significant: 4 });
-  return `${frequency}${order} · ${formatQuantity(curve.values[index] ?? 0, unit)}`;
+  const order =
+    turnHz === null ? '' : ` · order ${formatNumber(hz / turnHz, { decimals: 2, decimalMark })}`;
+  const frequency = formatQuantity(hz, 'Hz', { significant: 4, decimalMark });
+  return `${frequency}${order} · ${formatQuantity(curve.values[index] ?? 0, unit, { decimalMark })}`;
 }

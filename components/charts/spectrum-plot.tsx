@@ -3,7 +3,7 @@ import { nearestIndex } from '@/lib/domain/drawing/curve-pieces';
 import { formatNumber, formatTick } from '@/lib/format';
 import { XAxis, YAxis } from './chart-axes';
 import { linearX, linearY, type LinearScale } from './chart-scales';
-import type { ChartRange, PlotBox } from './chart-types';
+import type { ChartRange, ChartTitle, PlotBox } from './chart-types';
 import { Clip, clipId } from './plot-clip';
 import type { SpectrumCurve, SpectrumView } from './spectrum-types';
 
@@ -18,7 +18,7 @@ type SpectrumPlotProps = {
   curve: SpectrumCurve;
   shown: ChartRange;
   view: SpectrumView;
-  unit: string;
+  title: ChartTitle;
   /** Frequency of one turn; null where the speed is not known. */
   turnHz: number | null;
   cursor: { hz: number; value: number };
@@ -28,7 +28,7 @@ type SpectrumPlotProps = {
 
 /** Lines of a spectrum, reduced to the width by their largest, so that no peak is lost. */
 export function SpectrumPlot(props: SpectrumPlotProps) {
-  const { width, box, curve, shown, view, unit, turnHz, cursor, harmonicsHz } = props;
+  const { width, box, curve, shown, view, title, turnHz, cursor, harmonicsHz } = props;
   const range = { from: nearestIndex(curve.hz, shown.from), to: nearestIndex(curve.hz, shown.to) };
   const lines = columnMaxima(curve.values, range, Math.max(1, Math.floor(box.width)));
   const top = lines.reduce((most, { value }) => Math.max(most, value), 0) || 1;
@@ -41,7 +41,12 @@ export function SpectrumPlot(props: SpectrumPlotProps) {
   });
   return (
     <svg width={width} height={bottom + 40} className="block" aria-hidden="true">
-      <YAxis box={box} scale={y.scale} unit={unit} ticks={ticks} />
+      <YAxis
+        {...{ box, ticks }}
+        scale={y.scale}
+        unit={title.unit}
+        decimalMark={title.decimalMark}
+      />
       <FrequencyAxis {...{ box, x, shown, view, turnHz }} />
       <Clip box={box} />
       {turnHz !== null && (

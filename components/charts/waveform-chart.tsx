@@ -30,7 +30,7 @@ export function WaveformChart(props: WaveformChartProps) {
   const [wanted, setWanted] = useState<number | null>(null);
   const index = nearestIndex(curve.seconds, wanted ?? range.shown.from);
   const at = curve.seconds[index] ?? 0;
-  const text = `${formatDuration(at)} · ${formatQuantity(curve.values[index] ?? 0, title.unit)}`;
+  const text = `${formatDuration(at)} · ${formatQuantity(curve.values[index] ?? 0, title.unit, title)}`;
   const reduced = curve.sampleCount > curve.seconds.length;
   const fromShare = (share: number) => shareToX(share, range.shown);
   return (
@@ -62,7 +62,7 @@ export function WaveformChart(props: WaveformChartProps) {
               {...{ width, box, curve, turns, refining }}
               shown={range.shown}
               index={index}
-              unit={title.unit}
+              title={title}
             />
             <PlotSurface
               box={box}

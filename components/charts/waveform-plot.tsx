@@ -2,7 +2,7 @@ import { LinePath } from '@visx/shape';
 import { formatTick } from '@/lib/format';
 import { XAxis, YAxis } from './chart-axes';
 import { linearX, linearY } from './chart-scales';
-import type { ChartRange, PlotBox } from './chart-types';
+import type { ChartRange, ChartTitle, PlotBox } from './chart-types';
 import { Clip, clipId } from './plot-clip';
 
 /** A record as sent for the screen: reduced to its lowest and highest values, extremes kept. */
@@ -21,12 +21,12 @@ type WaveformPlotProps = {
   refining: boolean;
   shown: ChartRange;
   index: number;
-  unit: string;
+  title: ChartTitle;
 };
 
 /** The curve of a record with the tacho's pulses under it. */
 export function WaveformPlot(props: WaveformPlotProps) {
-  const { width, box, curve, turns, refining, shown, index, unit } = props;
+  const { width, box, curve, turns, refining, shown, index, title } = props;
   const x = linearX(shown, box);
   const y = linearY(valueRange(curve.values), box);
   const ticks = x.ticks(Math.max(2, Math.floor(box.width / 80)));
@@ -36,11 +36,11 @@ export function WaveformPlot(props: WaveformPlotProps) {
   const inSight = turns.filter((at) => at >= shown.from && at <= shown.to);
   return (
     <svg width={width} height={bottom + 40} className="block" aria-hidden="true">
-      <YAxis box={box} scale={y} unit={unit} />
+      <YAxis box={box} scale={y} unit={title.unit} decimalMark={title.decimalMark} />
       <XAxis
         {...{ box, ticks }}
         scale={x}
-        tickText={(value) => formatTick(value, step)}
+        tickText={(value) => formatTick(value, step, title.decimalMark)}
         label="s"
       />
       <Clip box={box} />

@@ -19,6 +19,7 @@ type FaceDrawingProps = {
 /** The drawing itself; which end it is seen from and the sense of rotation are written on it. */
 export function FaceDrawing({ plane, seenFrom, weights, readings, titleId }: FaceDrawingProps) {
   const seen = senseSeenFrom(plane.rotationFromDriveEnd, seenFrom);
+  const { decimalMark } = plane;
   const height = faceHeight(labelRows(weights, seen));
   return (
     <svg
@@ -44,8 +45,8 @@ export function FaceDrawing({ plane, seenFrom, weights, readings, titleId }: Fac
         markLabel={plane.markLabel}
         weightDegs={weights.map(({ angleDeg }) => angleDeg)}
       />
-      {readings && <FaceVectors vectors={readings.vectors} seen={seen} />}
-      <FaceWeights weights={weights} seen={seen} />
+      {readings && <FaceVectors vectors={readings.vectors} {...{ seen, decimalMark }} />}
+      <FaceWeights {...{ weights, seen, decimalMark }} />
     </svg>
   );
 }
@@ -55,11 +56,11 @@ function description(shown: Omit<FaceDrawingProps, 'titleId'>): string {
   const turning = senseSeenFrom(plane.rotationFromDriveEnd, seenFrom);
   const hung = weights.map(
     (weight) =>
-      `${formatMass(weight.massG)} at ${formatDegrees(weight.angleDeg)}, ${STATE_WORDS[weight.state]}`,
+      `${formatMass(weight.massG, plane.decimalMark)} at ${formatDegrees(weight.angleDeg)}, ${STATE_WORDS[weight.state]}`,
   );
   const read = readings?.vectors.map(
     (vector) =>
-      `${vector.label} ${formatQuantity(vector.amplitude, readings.unit)} at ${formatLag(vector.lagDeg)}`,
+      `${vector.label} ${formatQuantity(vector.amplitude, readings.unit, { decimalMark: plane.decimalMark })} at ${formatLag(vector.lagDeg, readings.phaseShown)}`,
   );
   return [
     `The rotor turns ${turning === 'cw' ? 'clockwise' : 'counter-clockwise'} on this drawing.`,

@@ -1,5 +1,6 @@
 import type { Sense, ViewingEnd } from '@/lib/domain/drawing/face-view';
 import type { NamedPosition } from '@/lib/domain/drawing/rotor-place';
+import type { DecimalMark } from '@/lib/format';
 
 /** The plane that is drawn. */
 export type FacePlane = {
@@ -12,6 +13,8 @@ export type FacePlane = {
   positions?: readonly NamedPosition[];
   /** What the mark is: “white paint”, “keyway”. */
   markLabel?: string;
+  /** Of the site; a point where left out. */
+  decimalMark?: DecimalMark;
 };
 
 /** On the rotor now; hung on to learn; the answer; taken off again. */
@@ -33,6 +36,8 @@ export type FaceReadings = {
   unit: string;
   /** “bearing A horizontal”. */
   point: string;
+  /** How the site reads phase; lag where left out. */
+  phaseShown?: 'lag' | 'lead';
   vectors: readonly FaceVector[];
 };
 

@@ -1,6 +1,6 @@
 import { polarPlace, screenDeg, type Sense } from '@/lib/domain/drawing/face-view';
 import { spreadApart } from '@/lib/domain/drawing/leader-rows';
-import { formatNumber } from '@/lib/format';
+import { formatNumber, type DecimalMark } from '@/lib/format';
 import { FACE } from './face-layout';
 import type { FaceVector } from './face-types';
 
@@ -8,10 +8,14 @@ const { centre, rim } = FACE;
 const LONGEST = rim * 0.68;
 const MOST_WORDS = 4;
 
-type FaceVectorsProps = { vectors: readonly FaceVector[]; seen: Sense };
+type FaceVectorsProps = {
+  vectors: readonly FaceVector[];
+  seen: Sense;
+  decimalMark?: DecimalMark;
+};
 
 /** The 1x readings as scribed vectors from the centre, and the walk of their tips from run to run. */
-export function FaceVectors({ vectors, seen }: FaceVectorsProps) {
+export function FaceVectors({ vectors, seen, decimalMark }: FaceVectorsProps) {
   const largest = Math.max(0, ...vectors.map(({ amplitude }) => amplitude));
   if (largest === 0) return null;
   const tips = vectors.map((vector) => ({
@@ -49,14 +53,20 @@ export function FaceVectors({ vectors, seen }: FaceVectorsProps) {
         <circle key={vector.label} cx={x} cy={y} r={i === 0 ? 3 : 2.5} className="fill-scribe" />
       ))}
       {worded.map(({ vector, x }, i) => (
-        <VectorWords key={vector.label} vector={vector} x={x} y={heights[i] ?? centre.y} />
+        <VectorWords
+          key={vector.label}
+          {...{ vector, x, decimalMark }}
+          y={heights[i] ?? centre.y}
+        />
       ))}
     </g>
   );
 }
 
+type VectorWordsProps = { vector: FaceVector; x: number; y: number; decimalMark?: DecimalMark };
+
 /** Beside the tip, on the side with more room, so that the words stay on the disc. */
-function VectorWords({ vector, x, y }: { vector: FaceVector; x: number; y: number }) {
+function VectorWords({ vector, x, y, decimalMark }: VectorWordsProps) {
   const towardsLeft = x > centre.x + 8;
   return (
     <text
@@ -68,7 +78,7 @@ function VectorWords({ vector, x, y }: { vector: FaceVector; x: number; y: numbe
       stroke="rgb(var(--disc))"
       strokeWidth={3}
     >
-      {vector.label} {formatNumber(vector.amplitude)}
+      {vector.label} {formatNumber(vector.amplitude, { decimalMark })}
     </text>
   );
 }

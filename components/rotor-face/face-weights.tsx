@@ -1,7 +1,7 @@
 import { polarPlace, screenDeg, type Sense } from '@/lib/domain/drawing/face-view';
 import { leaderRows, type LeaderRow } from '@/lib/domain/drawing/leader-rows';
 import { weightDotRadii } from '@/lib/domain/drawing/weight-dots';
-import { formatDegrees, formatMass } from '@/lib/format';
+import { formatDegrees, formatMass, type DecimalMark } from '@/lib/format';
 import { FACE, HALO } from './face-layout';
 import { STATE_WORDS, type FaceWeight } from './face-types';
 import { WeightDot } from './weight-dot';
@@ -12,8 +12,10 @@ export function labelRows(weights: readonly FaceWeight[], seen: Sense): number {
   return rows.reduce((most, { row }) => Math.max(most, row + 1), 0);
 }
 
+type FaceWeightsProps = { weights: readonly FaceWeight[]; seen: Sense; decimalMark?: DecimalMark };
+
 /** Every weight as brass on the rim, with a line to its words under the disc. */
-export function FaceWeights({ weights, seen }: { weights: readonly FaceWeight[]; seen: Sense }) {
+export function FaceWeights({ weights, seen, decimalMark }: FaceWeightsProps) {
   const places = weights.map(({ angleDeg }) => screenDeg(angleDeg, seen));
   const rows = leaderRows(places);
   const radii = weightDotRadii(
@@ -37,11 +39,14 @@ export function FaceWeights({ weights, seen }: { weights: readonly FaceWeight[];
           strokeWidth={0.75}
         />
       ))}
-      {marks.map(({ weight, at, radius }) => (
-        <WeightDot key={weight.id} at={at} radius={radius} state={weight.state} />
-      ))}
+      {/* Larger ones first, so that a small one on the same place stays in sight. */}
+      {[...marks]
+        .sort((a, b) => b.radius - a.radius)
+        .map(({ weight, at, radius }) => (
+          <WeightDot key={weight.id} at={at} radius={radius} state={weight.state} />
+        ))}
       {marks.map(({ weight, row }) => (
-        <WeightWords key={weight.id} weight={weight} row={row} />
+        <WeightWords key={weight.id} {...{ weight, row, decimalMark }} />
       ))}
     </g>
   );
@@ -64,7 +69,9 @@ function rowMiddle(row: number): number {
   return FACE.firstRow + row * FACE.rowHeight - 5;
 }
 
-function WeightWords({ weight, row }: { weight: FaceWeight; row: LeaderRow }) {
+type WeightWordsProps = { weight: FaceWeight; row: LeaderRow; decimalMark?: DecimalMark };
+
+function WeightWords({ weight, row, decimalMark }: WeightWordsProps) {
   const left = row.side === 'left';
   const x = left ? WORDS_FROM_EDGE + 3 : FACE.width - WORDS_FROM_EDGE - 3;
   const y = rowMiddle(row.row) + 5;
@@ -72,7 +79,7 @@ function WeightWords({ weight, row }: { weight: FaceWeight; row: LeaderRow }) {
   return (
     <text textAnchor={left ? 'start' : 'end'} {...HALO}>
       <tspan x={x} y={y} className="figures fill-ink text-[13px] font-bold">
-        {formatMass(weight.massG)} at {formatDegrees(weight.angleDeg)}
+        {formatMass(weight.massG, decimalMark)} at {formatDegrees(weight.angleDeg)}
       </tspan>
       <tspan x={x} y={y + 14} className="fill-ink-soft text-[12px]">
         {shortened(weight.label === undefined ? state : `${state}, ${weight.label}`)}

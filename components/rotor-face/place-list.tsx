@@ -19,7 +19,7 @@ export function PlaceList({ plane, weights, seenFrom }: PlaceListProps) {
     <ul className="mt-3 flex flex-col gap-2 text-sm">
       {weights.map((weight) => (
         <li key={weight.id}>
-          <span className="figures font-bold">{formatMass(weight.massG)}</span>{' '}
+          <span className="figures font-bold">{formatMass(weight.massG, plane.decimalMark)}</span>{' '}
           {STATE_WORDS[weight.state]}
           {weight.label !== undefined && `, ${weight.label}`}
           <span className="block text-ink-soft">
@@ -41,7 +41,7 @@ function Ways({ plane, angleDeg }: { plane: FacePlane; angleDeg: number }) {
     <>
       <span className="font-semibold text-ink">{formatRotorAngle(angleDeg)}</span> ={' '}
       <span className="font-semibold text-ink">{arc}</span> along the rim at r&nbsp;
-      {formatQuantity(plane.radiusMm, 'mm')}
+      {formatQuantity(plane.radiusMm, 'mm', { decimalMark: plane.decimalMark })}
       {words.kind === 'at' && (
         <>
           {' '}

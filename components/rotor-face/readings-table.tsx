@@ -1,8 +1,10 @@
-import { formatLag, formatQuantity } from '@/lib/format';
+import { formatLag, formatQuantity, type DecimalMark } from '@/lib/format';
 import type { FaceReadings } from './face-types';
 
+type ReadingsTableProps = { readings: FaceReadings; decimalMark?: DecimalMark };
+
 /** The vectors of the drawing as a table, for those who do not see it. */
-export function ReadingsTable({ readings }: { readings: FaceReadings }) {
+export function ReadingsTable({ readings, decimalMark }: ReadingsTableProps) {
   return (
     <div className="sr-only">
       <table>
@@ -18,8 +20,8 @@ export function ReadingsTable({ readings }: { readings: FaceReadings }) {
           {readings.vectors.map((vector) => (
             <tr key={vector.label}>
               <th scope="row">{vector.label}</th>
-              <td>{formatQuantity(vector.amplitude, readings.unit)}</td>
-              <td>{formatLag(vector.lagDeg)}</td>
+              <td>{formatQuantity(vector.amplitude, readings.unit, { decimalMark })}</td>
+              <td>{formatLag(vector.lagDeg, readings.phaseShown)}</td>
             </tr>
           ))}
         </tbody>

@@ -54,7 +54,7 @@ export function RotorFace({
           </Button>
         </div>
         {!withoutPlaces && <PlaceList plane={plane} weights={weights} seenFrom={end} />}
-        {readings && <ReadingsTable readings={readings} />}
+        {readings && <ReadingsTable readings={readings} decimalMark={plane.decimalMark} />}
       </figcaption>
     </figure>
   );
