@@ -15,20 +15,27 @@ type NumberRule = {
  */
 export function typedNumber(rule: NumberRule) {
   return z.union([z.number(), z.string()]).transform((typed, context) => {
-    const value = typeof typed === 'number' ? typed : readNumber(typed);
-    const problem = value === null ? notANumber(rule, String(typed)) : outOfRange(rule, value);
-    if (problem === null && value !== null) return value;
-    context.addIssue({ code: 'custom', message: problem ?? notANumber(rule, String(typed)) });
-    return z.NEVER;
+    return numberOrIssue(rule, typed, context);
   });
 }
 
 /** The same, where leaving it empty means "not known". */
 export function optionalNumber(rule: NumberRule) {
-  const empty = z
-    .union([z.literal(''), z.null(), z.undefined()])
-    .transform((): number | null => null);
-  return z.union([empty, typedNumber(rule)]);
+  // Not a union with `typedNumber`: a union answers with its own words where each member has failed.
+  return z
+    .union([z.number(), z.string(), z.null(), z.undefined()])
+    .transform((typed, context): number | null => {
+      if (typed === null || typed === undefined || typed === '') return null;
+      return numberOrIssue(rule, typed, context);
+    });
+}
+
+function numberOrIssue(rule: NumberRule, typed: number | string, context: z.RefinementCtx) {
+  const value = typeof typed === 'number' ? typed : readNumber(typed);
+  const problem = value === null ? notANumber(rule, String(typed)) : outOfRange(rule, value);
+  if (problem === null && value !== null) return value;
+  context.addIssue({ code: 'custom', message: problem ?? notANumber(rule, String(typed)) });
+  return z.NEVER;
 }
 
 /** An id that came through a form or an address. */
