@@ -1,6 +1,6 @@
 import { ok, type Result } from '../result';
 import { columnMeaning, type ColumnMeaning } from './column-name';
-import type { ColumnLayout, DecimalMark, LayoutColumn } from './column-layout';
+import type { ColumnLayout, DecimalMark, Delimiter, LayoutColumn } from './column-layout';
 import { decimalMarkOf } from './decimal-mark';
 import { detectEncoding } from './decode-text';
 import { fileFacts } from './file-facts';
@@ -26,17 +26,20 @@ export const PREVIEW_ROWS = 20;
  * the whole file, header, role, quantity and unit of each column, and the sample rate and speed it
  * states. What cannot be read off is left null and asked in `questions`; it is never guessed.
  * `shapeKey` is equal for files of the same shape, so that a layout kept for one is found for the
- * next. Fails on an empty or binary file, one without numbers, and one whose numbers no single
- * decimal mark explains.
+ * next. `delimiter` is a person's answer to what separates the columns; left out, it is found out.
+ * Fails on an empty or binary file, one without numbers, and one whose numbers no single decimal mark
+ * explains.
  */
 export function proposeColumnLayout(
   bytes: Uint8Array,
   fileName: string,
+  delimiter?: Delimiter,
 ): Result<ColumnLayoutProposal, IntakeFailure> {
   const encoding = detectEncoding(bytes, fileName);
   if (!encoding.ok) return encoding;
   const lines = headLines(bytes, encoding.value);
-  const sniffed = sniffDelimiter(lines);
+  const sniffed: Sniffed =
+    delimiter === undefined ? sniffDelimiter(lines) : { delimiter, comma: 'settled' };
   const table = headTable(lines, sniffed.delimiter);
   const refused = refusal(table, sniffed, fileName);
   if (refused !== null) return refused;

@@ -24,14 +24,29 @@ export function thirdOctaveLevels(spectrum: AmplitudeSpectrum, centres: Band): T
 }
 
 /**
- * How unlike two spectra of one quantity are: the rms, over the third-octave bands from 10 Hz to
- * 1000 Hz that both have, of their level differences, in dB. Zero for equal spectra; a record twice
- * as large everywhere is 6.02 dB away. Null when no band is shared.
+ * How unlike two spectra of one quantity are: the distance of their third-octave levels from 10 Hz to
+ * 1000 Hz, in dB. Zero for equal spectra; a record twice as large everywhere is 6.02 dB away. Null
+ * when no band is shared.
  */
 export function thirdOctaveDistanceDb(a: AmplitudeSpectrum, b: AmplitudeSpectrum): number | null {
-  const levelsOfB = thirdOctaveLevels(b, COMPARED_THIRD_OCTAVES);
-  const squares = thirdOctaveLevels(a, COMPARED_THIRD_OCTAVES).flatMap(({ levelDb }, i) => {
-    const other = levelsOfB[i]?.levelDb ?? null;
+  return levelDistanceDb(
+    thirdOctaveLevels(a, COMPARED_THIRD_OCTAVES),
+    thirdOctaveLevels(b, COMPARED_THIRD_OCTAVES),
+  );
+}
+
+/**
+ * Rms of the differences of two sets of third-octave levels, band by band in the same order, over the
+ * bands that both have, in dB; null when they share none.
+ *
+ * Example: levels of 10 and 20 dB against 13 and 16 dB are √12.5 dB apart.
+ */
+export function levelDistanceDb(
+  a: readonly ThirdOctaveLevel[],
+  b: readonly ThirdOctaveLevel[],
+): number | null {
+  const squares = a.flatMap(({ levelDb }, i) => {
+    const other = b[i]?.levelDb ?? null;
     return levelDb === null || other === null ? [] : [(levelDb - other) ** 2];
   });
   if (squares.length === 0) return null;
