@@ -1,5 +1,6 @@
 import type { Metadata, Viewport } from 'next';
 import type { ReactNode } from 'react';
+import { ThemeScript } from '@/components/register/theme';
 import { figures, words } from './fonts';
 import './globals.css';
 
@@ -12,7 +13,10 @@ export const viewport: Viewport = { width: 'device-width', initialScale: 1 };
 
 export default function RootLayout({ children }: { children: ReactNode }) {
   return (
-    <html lang="en" className={`${words.variable} ${figures.variable}`}>
+    <html lang="en" className={`${words.variable} ${figures.variable}`} suppressHydrationWarning>
+      <head>
+        <ThemeScript />
+      </head>
       <body>{children}</body>
     </html>
   );

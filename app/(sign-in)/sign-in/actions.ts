@@ -6,7 +6,7 @@ import type { ActionState } from '@/lib/schemas/action-state';
 import { signInInput } from '@/lib/schemas/sign-in';
 import { typedValues } from '@/lib/server/form-input';
 import { sessionCookie } from '@/lib/server/session';
-import { endSession, signIn } from '@/lib/server/sign-in';
+import { signIn } from '@/lib/server/sign-in';
 
 export async function signInAction(_previous: ActionState, form: FormData): Promise<ActionState> {
   const { password: _password, ...values } = typedValues(form);
@@ -28,13 +28,6 @@ export async function signInAction(_previous: ActionState, form: FormData): Prom
   cookie.key = result.value.key;
   await cookie.save();
   redirect(safeNext(form.get('next')));
-}
-
-export async function signOutAction(): Promise<void> {
-  const cookie = await sessionCookie();
-  if (cookie.key) await endSession(cookie.key);
-  cookie.destroy();
-  redirect(routes.signIn());
 }
 
 /** Only an address of this product, so that a link cannot lead elsewhere after signing in. */
