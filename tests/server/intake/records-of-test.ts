@@ -30,7 +30,7 @@ export function failureOf<Value>(result: Result<Value>) {
   return result.failure;
 }
 
-/** A record of `seconds` at 1000 Hz in g: 1x of `rms` g at `hz`, with a little of its second order. */
+/** A record of `seconds` at 2560 Hz in g: 1x of `rms` g at `hz`, with a little of its second order. */
 export function sineCsv(options: {
   hz: number;
   rms: number;
@@ -40,11 +40,11 @@ export function sineCsv(options: {
   seed?: number;
 }): string {
   const { hz, rms, seconds = 2, tag = '', seed = 1 } = options;
-  const lines = [`# sample_rate_hz=1000${tag}`, 'acceleration_g'];
+  const lines = [`# sample_rate_hz=2560${tag}`, 'acceleration_g'];
   let state = seed;
-  for (let i = 0; i < 1000 * seconds; i++) {
+  for (let i = 0; i < 2560 * seconds; i++) {
     state = (state * 1_103_515_245 + 12_345) % 2_147_483_648;
-    const t = i / 1000;
+    const t = i / 2560;
     const tone = Math.SQRT2 * rms * Math.sin(2 * Math.PI * hz * t);
     const second = 0.2 * rms * Math.sin(4 * Math.PI * hz * t + 1);
     const noise = 0.1 * rms * (state / 1_073_741_824 - 1);
@@ -57,7 +57,7 @@ export function sineCsv(options: {
 export const ONE_COLUMN_G: LayoutChoicesInput = {
   delimiter: 'none',
   decimalMark: 'point',
-  sampleRateHz: 1000,
+  sampleRateHz: 2560,
   columns: [{ role: 'signal', unit: 'g' }],
 };
 
