@@ -25,27 +25,24 @@ export function readPreview(
   upload: Pick<Upload, 'fileName' | 'layout'>,
   choices: Choices | null,
 ): PreviewDto {
-  const kept = readUploadLayout(upload.layout);
-  const delimiter = choices ? choices.delimiter : (kept?.layout.delimiter ?? null);
+  const { delimiter, questions } = startOf(upload, choices);
   const rows = rowsOf(bytes, upload.fileName, delimiter);
   const base = baseLayout(bytes, upload, delimiter);
   if (!base.ok) return { ...NOTHING, rows, problem: base.failure.message };
-  const questions = kept?.layout.delimiter === delimiter ? [...kept.questions] : [];
   const proposed = base.value.layout;
-  if (!choices?.columns.length) {
-    const open = questions.some(({ blocking }) => blocking);
-    const shown = { layout: layoutDto(proposed), questions, rows };
-    return { ...shown, ...(open ? UNREAD : reading(bytes, proposed, upload.fileName)) };
-  }
-  const chosen = applyColumnChoices(proposed, choices);
-  return chosen.ok
-    ? {
-        layout: layoutDto(chosen.value),
-        questions,
-        rows,
-        ...reading(bytes, chosen.value, upload.fileName),
-      }
-    : { layout: layoutDto(proposed), questions, rows, problem: chosen.failure.message, plot: null };
+  const chosen = choices?.columns.length ? applyColumnChoices(proposed, choices) : null;
+  const layout = chosen?.ok ? chosen.value : proposed;
+  const shown = { layout: layoutDto(layout), questions, rows };
+  if (chosen?.ok === false) return { ...shown, problem: chosen.failure.message, plot: null };
+  const open = chosen === null && questions.some(({ blocking }) => blocking);
+  return { ...shown, ...(open ? UNREAD : reading(bytes, layout, upload.fileName)) };
+}
+
+/** Which delimiter cuts the file, and what is asked of it then. */
+function startOf({ layout }: Pick<Upload, 'layout'>, choices: Choices | null) {
+  const kept = readUploadLayout(layout);
+  const delimiter = choices ? choices.delimiter : (kept?.layout.delimiter ?? null);
+  return { delimiter, questions: kept?.layout.delimiter === delimiter ? [...kept.questions] : [] };
 }
 
 const UNREAD = { problem: null, plot: null };

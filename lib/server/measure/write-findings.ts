@@ -7,10 +7,10 @@ import {
   type MeasuredRecord,
 } from '@/entities/measured-record';
 import type { LimitSet } from '@/entities/limit-set';
+import { judgeValue } from '@/lib/domain/severity/zone';
 import { METHOD, storedResult } from './derived-result';
 import type { DerivedFacts } from './derive';
 import type { PointContext } from './point-context';
-import { zoneOf } from './zone-of';
 
 type Findings = {
   readonly record: MeasuredRecord;
@@ -70,10 +70,22 @@ function writeReadings(em: EntityManager, { record, context, facts }: Findings):
       speedRpm,
       limitSet,
       limits,
-      zone: limits === null ? null : zoneOf(value.value, limits),
+      zone: zoneUnder(limitSet, value.value, speedRpm ?? context.point.machine.$.nominalSpeedRpm),
       status: record.state,
     });
   }
+}
+
+function zoneUnder(limitSet: LimitSet | null, value: number, speedRpm: number): Reading['zone'] {
+  if (limitSet === null) return null;
+  const { bAb: ab, bBc: bc, bCd: cd, speedMinRpm, speedMaxRpm } = limitSet;
+  const limits = {
+    boundaries: { ab, bc, cd },
+    speedMinRpm: speedMinRpm ?? null,
+    speedMaxRpm: speedMaxRpm ?? null,
+  };
+  const verdict = judgeValue(value, limits, speedRpm);
+  return verdict.kind === 'zone' ? verdict.zone : null;
 }
 
 /** Limits for housing velocity judge housing records, limits for shaft displacement shaft records. */
