@@ -1,0 +1,128 @@
+import { runName, type JobInput } from './job-input';
+import type { JobNotice, JobSolution } from './job-solution';
+
+type Known = Omit<JobSolution, 'notices'>;
+
+const MISFIT_PER_SCATTER = 3;
+const DIFFERENCE_PCT = 10;
+const LARGE_CHANGE_PCT = 200;
+const FIGHTING = 0.3;
+const RISE = 1.2;
+
+/**
+ * What must be said beside a solution: doubtful speeds, scatter, trials, condition, misfit, fitted weights
+ * that answered differently, points that would rise. In the order in which they matter to a reader.
+ * Example: S01 after its first check run says that the fitted weight answered 13 % differently.
+ */
+export function jobNotices(input: JobInput, solution: Known): JobNotice[] {
+  return [
+    ...runNotices(input, solution),
+    ...trialNotices(input, solution),
+    ...answerNotices(input, solution),
+    ...fitNotices(input, solution),
+  ];
+}
+
+function runNotices(input: JobInput, { speed, noise, nowFrom }: Known): JobNotice[] {
+  const notices: JobNotice[] = [];
+  if (speed.verdict === 'warn' || speed.worstPct > 1)
+    notices.push({
+      code: 'speed',
+      message: `The speed of ${nameOf(input, speed.worstRunId)} is ${speed.worstPct.toFixed(2)} % off the runs before it; size and lag change with speed.`,
+    });
+  if (noise.some(({ from }) => from === 'unknown'))
+    notices.push({
+      code: 'no-repeats',
+      message:
+        'No run was repeated, so the scatter is unknown and the answer has no stated uncertainty. Repeat the base run two or three times.',
+    });
+  if (noise.some(({ base }) => base && !base.good))
+    notices.push({
+      code: 'repeats-scatter',
+      message:
+        'The base runs scatter more than 5 % or 5°: let the machine warm up, look for a loose part, a beat or a resonance, and repeat them.',
+    });
+  if (nowFrom === 'model')
+    notices.push({
+      code: 'now-from-model',
+      message:
+        'No run was made with what is on the rotor now; its state follows from the other runs.',
+    });
+  return notices;
+}
+
+function trialNotices(input: JobInput, { trials }: Known): JobNotice[] {
+  return trials.flatMap(({ runId, verdict, points }): JobNotice[] => {
+    const name = nameOf(input, runId);
+    const wide: JobNotice[] =
+      verdict === 'wide'
+        ? [
+            {
+              code: 'trial-wide',
+              message: `The weight of ${name} was heard at 5 to 10 times the noise: the answer has a wide band. A heavier trial weight or longer averaging narrows it.`,
+            },
+          ]
+        : [];
+    const large: JobNotice[] = points.some(({ changePct }) => changePct > LARGE_CHANGE_PCT)
+      ? [
+          {
+            code: 'trial-large',
+            message: `The weight of ${name} changed the reading by more than twice its size. Check its mass and look for a resonance.`,
+          },
+        ]
+      : [];
+    return [...wide, ...large];
+  });
+}
+
+function answerNotices(input: JobInput, { condition, answer, now }: Known): JobNotice[] {
+  const notices: JobNotice[] = [];
+  if (condition.verdict === 'caution')
+    notices.push({
+      code: 'condition',
+      message: `The planes act much alike at the points (condition number ${condition.number.toFixed(1)}): small errors grow into grams. Look at the uncertainty before fitting.`,
+    });
+  if (answer && answer.add.length > 1 && answer.sumOverTotal < FIGHTING)
+    notices.push({
+      code: 'opposing-weights',
+      message:
+        'The weights of this answer mostly cancel each other. That is right for a couple, and a sign of doubt otherwise: compare with the static pair.',
+    });
+  const rising = input.points.filter(({ id }) => {
+    const before = now.find(({ pointId }) => pointId === id)?.amplitude ?? 0;
+    const after = answer?.predicted.find(({ pointId }) => pointId === id)?.amplitude ?? 0;
+    return after > RISE * before;
+  });
+  if (rising.length > 0)
+    notices.push({
+      code: 'point-rises',
+      message: `This answer raises the reading at ${rising.map(({ label }) => label).join(', ')} by more than 20 %.`,
+    });
+  return notices;
+}
+
+function fitNotices(input: JobInput, solution: Known): JobNotice[] {
+  const { allRuns, estimates, noise } = solution;
+  const scatter = Math.max(0, ...noise.map((n) => n.scatter ?? 0));
+  const notices: JobNotice[] = [];
+  if (allRuns && scatter > 0 && allRuns.misfitRms > MISFIT_PER_SCATTER * scatter)
+    notices.push({
+      code: 'misfit',
+      message: `Over all runs the fit misses by ${allRuns.misfitRms.toFixed(3)} ${input.unit} rms, more than 3 times the scatter of ${scatter.toFixed(3)}; ${nameOf(input, allRuns.worstRunId)} fits worst. Check the weights entered for it.`,
+    });
+  const trialRuns = new Set(solution.model.source === 'stored' ? [] : solution.model.runIds);
+  for (const e of estimates.filter(({ runId }) => !trialRuns.has(runId))) {
+    if (e.differencePct <= DIFFERENCE_PCT || e.purpose === 'trial') continue;
+    const label = input.points.find(({ id }) => id === e.pointId)?.label ?? '';
+    notices.push({
+      code: 'estimate-differs',
+      message: `The weight fitted before ${nameOf(input, e.runId)} answered ${e.differencePct.toFixed(0)} % differently from the coefficients at ${label}: check angle and mass of what was fitted.`,
+    });
+  }
+  return notices;
+}
+
+function nameOf(input: JobInput, runId: number | null): string {
+  const run = input.runs.find(({ id }) => id === runId);
+  return run ? runName(run) : 'one run';
+}
