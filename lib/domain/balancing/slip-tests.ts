@@ -1,0 +1,102 @@
+import { subtract, ZERO } from '../complex';
+import { fail, ok, type Result } from '../result';
+import { normaliseDeg } from '../units';
+import { buildAnswer } from './build-answer';
+import { rootMeanSquare } from './influence-fit';
+import type { FittedWeight, JobInput, JobRun } from './job-input';
+import { missOf, predictRun } from './predict-run';
+import { slipHypotheses, type SlipHypothesis } from './slip-hypotheses';
+import { solveJob } from './solve-job';
+import { polarUnbalance, unbalanceByPlane, type PolarUnbalance } from './weights-ledger';
+
+/** A check run that missed its prediction, and what is known of the fitting before it. */
+export type SlipInput = {
+  readonly job: JobInput;
+  readonly checkRunId: number;
+  /** The weights fitted just before the check run, as entered. */
+  readonly fitted: readonly FittedWeight[];
+  /** Pitch of fixed positions, degrees, where weights go to numbered positions. */
+  readonly pitchDeg?: number | null;
+  /** Another radius at which the weight could hang, mm. */
+  readonly otherRadiusMm?: number | null;
+};
+
+/** How well one slip explains a check run. */
+export type SlipTest = {
+  readonly slip: SlipHypothesis['slip'];
+  readonly words: string;
+  /** rms over points of measured minus expected, were this slip what happened. */
+  readonly miss: number;
+  /** Within the band at every point; null where no band is known. */
+  readonly inside: boolean | null;
+  /** Were it so: what should hang there in total, and what to add to what hangs there. */
+  readonly total: readonly (PolarUnbalance & { readonly planeId: number })[];
+  readonly add: readonly (PolarUnbalance & { readonly planeId: number })[];
+};
+
+/**
+ * Recomputes a missed check run under the common slips and ranks them by miss, smallest first. A slip
+ * that explains the run is a question to the person at the machine, never a correction by itself;
+ * degrees counted with rotation and lead read as lag explain a run equally well.
+ *
+ * @returns the slips ranked, or a failure where the check run is not in the job or nothing can be solved
+ * Source: linear model, one altered entry at a time.
+ * @example S07 → 'angles counted with rotation' 0.08 mm/s, as entered 5.81
+ */
+export function slipTests(input: SlipInput): Result<SlipTest[]> {
+  const at = input.job.runs.findIndex(({ id }) => id === input.checkRunId);
+  const check = input.job.runs[at];
+  if (!check)
+    return fail('no-run', 'The check run is not part of this job. Choose a check run of the job.');
+  const before = { ...input.job, runs: input.job.runs.slice(0, at) };
+  const asEntered = { job: before, check, fitted: input.fitted };
+  const tests: SlipTest[] = [];
+  for (const hypothesis of slipHypotheses(before, input)) {
+    const test = testOf(hypothesis, hypothesis.alter(asEntered));
+    if (test.ok) tests.push(test.value);
+    else if (hypothesis.slip === 'as entered') return test;
+  }
+  return ok(tests.sort((a, b) => a.miss - b.miss));
+}
+
+function testOf(
+  { slip, words }: SlipHypothesis,
+  story: {
+    readonly job: JobInput;
+    readonly check: JobRun;
+    readonly fitted: readonly FittedWeight[];
+  },
+): Result<SlipTest> {
+  const { job, check, fitted } = story;
+  const others = check.weights;
+  const solution = solveJob({ ...job, weightsNow: others });
+  if (!solution.ok) return solution;
+  const basis = solution.value;
+  const misses = missOf(predictRun(basis, job, [...others, ...fitted]), check.vectors);
+  const kind = job.points.length === job.planes.length ? 'exact' : 'least squares';
+  const answer = buildAnswer({ input: job, basis, meanRpm: basis.speed.meanRpm }, kind);
+  if (!answer.ok) return answer;
+  const ids = job.planes.map(({ id }) => id);
+  const hanging = unbalanceByPlane(fitted, ids);
+  const wanted = answer.value.add.map(({ massG, radiusMm, angleDeg, planeId }) => ({
+    massG,
+    radiusMm,
+    angleDeg,
+    planeId,
+  }));
+  const more = unbalanceByPlane(wanted, ids).map((u, i) => subtract(u, hanging[i] ?? ZERO));
+  return ok({
+    slip,
+    words,
+    miss: rootMeanSquare(misses.map(({ miss }) => miss)),
+    inside: misses.some(({ inside }) => inside === null)
+      ? null
+      : misses.every(({ inside }) => inside),
+    total: answer.value.total.map(({ planeId, unbalanceGmm, angleDeg }) => ({
+      planeId,
+      unbalanceGmm,
+      angleDeg: normaliseDeg(angleDeg),
+    })),
+    add: ids.map((planeId, i) => ({ planeId, ...polarUnbalance(more[i] ?? ZERO) })),
+  });
+}
