@@ -1,4 +1,6 @@
 import { defineEntity, p, type InferEntity } from '@mikro-orm/core';
+import type { JobInput } from '@/lib/domain/balancing/job-input';
+import type { JobSolution } from '@/lib/domain/balancing/job-solution';
 import { BalanceJob, Run } from './balance-job';
 import { Person } from './person';
 import { Plane, Rotor } from './rotor';
@@ -18,8 +20,8 @@ export const Answer = defineEntity({
     /** The newest run the answer was computed from. */
     afterRunNumber: p.integer(),
     method: p.string().length(60),
-    inputs: p.json<unknown>(),
-    result: p.json<unknown>(),
+    inputs: p.json<JobInput>(),
+    result: p.json<JobSolution>(),
     acceptedBy: () => p.manyToOne(Person).ref(),
     acceptedAt: p.datetime(),
   },

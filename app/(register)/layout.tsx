@@ -1,6 +1,5 @@
 import type { ReactNode } from 'react';
 import { AppShell } from '@/components/register/app-shell';
-import { ROLE_NAMES } from '@/lib/format';
 import { requireActor } from '@/lib/server/actor';
 import { inTrayCount } from '@/lib/server/queries/in-tray-count';
 import { chosenSiteId } from '@/lib/server/chosen-site';
@@ -11,7 +10,7 @@ export default async function RegisterLayout({ children }: { children: ReactNode
   const [siteId, waiting] = await Promise.all([chosenSiteId(actor), inTrayCount(actor, undefined)]);
   return (
     <AppShell
-      person={{ name: actor.name, role: ROLE_NAMES[actor.role] }}
+      person={{ name: actor.name, role: actor.role }}
       sites={actor.sites.map(({ id, name }) => ({ id, name }))}
       siteId={siteId}
       inTrayCount={waiting}

@@ -7,13 +7,15 @@ import type { Plane } from '@/entities/rotor';
 import { Weight } from '@/entities/weight';
 import { nextStep, type Step } from '@/lib/domain/balance-job/next-step';
 
+export type VisibleJob = Loaded<BalanceJob, 'machine' | 'rotor' | 'setup' | 'site'>;
+
 export type LoadedRun = { run: Run; vectors: RunVector[] };
 
 /** A job with everything its arithmetic and its order of work depend on. */
 export type LoadedJob = {
-  job: BalanceJob;
+  job: VisibleJob;
   planes: Plane[];
-  points: Point[];
+  points: Loaded<Point, 'bearing'>[];
   runs: LoadedRun[];
   /** Every weight fitted in this job, ended ones too, in the order fitted. */
   weights: Loaded<Weight, 'plane' | 'position' | 'fittedBy' | 'endedBy'>[];
@@ -22,10 +24,14 @@ export type LoadedJob = {
 };
 
 /** Loads what hangs on a job, in a fixed number of statements. */
-export async function loadJob(em: EntityManager, job: BalanceJob): Promise<LoadedJob> {
+export async function loadJob(em: EntityManager, job: VisibleJob): Promise<LoadedJob> {
   const order = { orderBy: { order: 'asc' } } as const;
   const planes = await em.find(JobPlane, { job: job.id }, { ...order, populate: ['plane'] });
-  const points = await em.find(JobPoint, { job: job.id }, { ...order, populate: ['point'] });
+  const points = await em.find(
+    JobPoint,
+    { job: job.id },
+    { ...order, populate: ['point.bearing'] },
+  );
   const runs = await em.find(Run, { job: job.id }, { orderBy: { number: 'asc' } });
   const vectors = await em.find(RunVector, { run: { job: job.id } }, { orderBy: { id: 'asc' } });
   const weights = await em.find(

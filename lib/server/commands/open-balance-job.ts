@@ -46,7 +46,12 @@ export const openBalanceJob = command(
     input.planeIds.forEach((plane, index) => em.create(JobPlane, { job, plane, order: index + 1 }));
     input.pointIds.forEach((point, index) => em.create(JobPoint, { job, point, order: index + 1 }));
     const at = { jobId: job.id, personId: actor.personId, now, step: 'opened' };
-    recordCautions(em, at, machine.confinedSpace ? ['SAF-00', 'SAF-05'] : ['SAF-00'], null);
+    recordCautions(
+      em,
+      at,
+      machine.confinedSpace ? ['standing sentence', 'SAF-05'] : ['standing sentence'],
+      null,
+    );
     audit({
       siteId: machine.site.id,
       entity: 'BalanceJob',

@@ -1,0 +1,122 @@
+import { Notice } from '@/components/ui/notice';
+import { RowHead, Table, Td, Th } from '@/components/ui/table';
+import { PlaceInWords } from './place-in-words';
+import { formatDegrees, formatLag, formatMass, formatNumber, formatQuantity } from '@/lib/format';
+import type { AnswerDto, BalanceJobDto } from '@/lib/schemas/balance-job';
+
+type AnswerCardProps = { job: BalanceJobDto; answer: AnswerDto };
+
+/** Where the weight belongs: plane, grams, place in several ways, force, and what to expect after. */
+export function AnswerCard({ job, answer }: AnswerCardProps) {
+  const mark = job.site.decimalMark;
+  return (
+    <div className="flex flex-col gap-4">
+      {answer.warnings.map((warning) => (
+        <Notice key={warning} kind="caution">
+          {warning}
+        </Notice>
+      ))}
+      <Table caption="Add to what is on the rotor now" captionShown roomy>
+        <thead>
+          <tr>
+            <Th>plane</Th>
+            <Th numeric>add</Th>
+            <Th numeric>at, against rotation</Th>
+            <Th numeric>radius</Th>
+            <Th numeric>force</Th>
+            <Th numeric>uncertainty</Th>
+            <Th numeric>total from as found</Th>
+          </tr>
+        </thead>
+        <tbody>
+          {answer.planes.map((plane) => (
+            <tr key={plane.planeId}>
+              <RowHead>{plane.planeName}</RowHead>
+              <Td numeric className="text-base font-semibold">
+                {formatMass(plane.massG, mark)}
+              </Td>
+              <Td numeric className="text-base font-semibold">
+                {formatDegrees(plane.angleDeg, 1, mark)}
+              </Td>
+              <Td numeric>{formatQuantity(plane.radiusMm, 'mm')}</Td>
+              <Td numeric>{formatQuantity(plane.forceN, 'N')}</Td>
+              <Td numeric>{uncertainty(plane.uncertaintyG, plane.uncertaintyDeg)}</Td>
+              <Td numeric>
+                {formatMass(plane.totalMassG, mark)} at{' '}
+                {formatDegrees(plane.totalAngleDeg, 1, mark)}
+              </Td>
+            </tr>
+          ))}
+        </tbody>
+      </Table>
+      {answer.planes.map((plane) => (
+        <PlaceInWords
+          key={plane.planeId}
+          plane={job.planes.find(({ id }) => id === plane.planeId)}
+          setup={job.setup}
+          angleDeg={plane.angleDeg}
+        />
+      ))}
+      <Expected job={job} answer={answer} />
+    </div>
+  );
+}
+
+function Expected({ job, answer }: AnswerCardProps) {
+  const { parts } = answer;
+  return (
+    <div className="text-sm">
+      <p>
+        Expected after fitting exactly this:{' '}
+        {answer.predicted.map((point, index) => (
+          <span key={point.pointId}>
+            {index > 0 && '; '}
+            {point.label}{' '}
+            <span className="figures">
+              {formatQuantity(point.amplitude, job.unit)}
+              {point.band !== null && ` ± ${formatNumber(point.band)}`}
+            </span>
+          </span>
+        ))}
+        .
+      </p>
+      <p className="text-ink-soft">
+        Condition number <span className="figures">{formatNumber(answer.condition.number)}</span> (
+        {CONDITION_WORDS[answer.condition.verdict]}); misfit of all runs{' '}
+        <span className="figures">{formatQuantity(answer.misfit, job.unit)}</span>; method{' '}
+        {answer.method}.
+        {parts &&
+          ` Static part ${formatMass(parts.static.massG)} in each plane at ${formatDegrees(parts.static.angleDeg, 1)}, couple part ${formatMass(parts.couple.massG)} at ${formatDegrees(parts.couple.angleDeg, 1)} in the first plane and opposite in the second.`}
+      </p>
+      <details className="mt-1">
+        <summary className="cursor-pointer">Influence coefficients used</summary>
+        <ul>
+          {answer.coefficients.map((h) => (
+            <li key={`${h.planeId}-${h.pointId}`}>
+              Plane {nameOf(job.planes, h.planeId)} to{' '}
+              {job.points.find(({ id }) => id === h.pointId)?.label}:{' '}
+              <span className="figures">
+                {formatQuantity(h.sizePerKgMm, `${job.unit} per kg·mm`)} at {formatLag(h.deg)}
+              </span>
+            </li>
+          ))}
+        </ul>
+      </details>
+    </div>
+  );
+}
+
+const CONDITION_WORDS = {
+  good: 'good',
+  caution: 'with care: small errors of reading move the weights a lot',
+  withhold: 'too high: the planes cannot be told apart',
+} as const;
+
+function uncertainty(grams: number | null, degrees: number | null): string {
+  if (grams === null || degrees === null) return 'not known: one base run';
+  return `± ${formatMass(grams)}, ± ${formatDegrees(degrees)}`;
+}
+
+function nameOf(planes: BalanceJobDto['planes'], id: number): string {
+  return planes.find((plane) => plane.id === id)?.name ?? '';
+}

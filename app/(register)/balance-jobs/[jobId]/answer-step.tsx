@@ -1,0 +1,60 @@
+'use client';
+
+import { Notice } from '@/components/ui/notice';
+import { formatNumber, formatQuantity } from '@/lib/format';
+import type { BalanceJobDto, TrialCheck } from '@/lib/schemas/balance-job';
+import { acceptAnswerAction } from './actions';
+import { AnswerCard } from './answer-card';
+import { StepForm } from './step-form';
+
+/** The answer to look at and accept, or in words why there is none. */
+export function AnswerStep({ job }: { job: BalanceJobDto }) {
+  const { answer } = job;
+  return (
+    <div className="flex flex-col gap-4">
+      <TrialResponses checks={job.trialChecks} />
+      {job.answerFailure !== null && <Notice kind="failure">{job.answerFailure}</Notice>}
+      {answer && (
+        <>
+          <AnswerCard job={job} answer={answer} />
+          <StepForm
+            jobId={job.id}
+            action={acceptAnswerAction}
+            button={answer.kind === 'trim' ? 'Use this trim' : 'Use this answer'}
+          >
+            {() => <input type="hidden" name="fingerprint" value={answer.fingerprint} />}
+          </StepForm>
+        </>
+      )}
+    </div>
+  );
+}
+
+function TrialResponses({ checks }: { checks: readonly TrialCheck[] }) {
+  if (checks.length === 0) return null;
+  return (
+    <ul className="text-sm">
+      {checks.map((check) => (
+        <li key={check.planeId}>
+          Trial in plane {check.planeName}: the reading at {check.pointLabel} changed by{' '}
+          <span className="figures">{formatQuantity(check.changePct, '%')}</span>
+          {check.changeOverNoise !== null && (
+            <>
+              , <span className="figures">{formatNumber(check.changeOverNoise)}</span> times the
+              scatter
+            </>
+          )}
+          : {VERDICT_WORDS[check.verdict]}
+          {!check.thirtyRule && ' The trade’s 30 % or 30° rule is not met.'}
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+const VERDICT_WORDS = {
+  good: 'clear enough.',
+  wide: 'enough for a wide band; a larger trial weight would be better.',
+  refuse: 'too small to be told from the scatter. Fit a larger trial weight.',
+  unknown: 'the scatter is not known from one base run.',
+} as const;

@@ -1,0 +1,128 @@
+'use client';
+
+import { Panel } from '@/components/ui/panel';
+import { formatDegrees, formatMass, formatNumber, formatQuantity } from '@/lib/format';
+import type { BalanceJobDto } from '@/lib/schemas/balance-job';
+import { AnswerCard } from './answer-card';
+import { AnswerStep } from './answer-step';
+import { BaseStep } from './base-step';
+import { CheckTable } from './check-table';
+import { RunForm } from './run-form';
+import { SettleForm } from './settle-form';
+import { SignForm } from './sign-form';
+import { WeightForm } from './weight-form';
+
+/** The one thing to do now. Everything else on the sheet is what was done. */
+export function NextStep({ job }: { job: BalanceJobDto }) {
+  const { step } = job;
+  switch (step.step) {
+    case 'base':
+      return <BaseStep job={job} />;
+    case 'fit trial':
+      return <FitTrial job={job} planeId={step.planeId} />;
+    case 'trial run':
+      return (
+        <Panel title={`Next: trial run, plane ${nameOf(job, step.planeId)}`}>
+          <RunForm job={job} purpose="trial" button="Record trial run" />
+        </Panel>
+      );
+    case 'settle trial':
+      return (
+        <Panel title="Next: is the trial weight still on the rotor?">
+          <SettleForm job={job} weightId={step.weightId} />
+        </Panel>
+      );
+    case 'answer':
+      return (
+        <Panel title="Next: the answer">
+          <AnswerStep job={job} />
+        </Panel>
+      );
+    case 'fit correction':
+      return <FitCorrection job={job} planeIds={step.planeIds} />;
+    case 'decide':
+      return <Decide job={job} />;
+    case 'closed':
+      return null;
+  }
+}
+
+function FitTrial({ job, planeId }: { job: BalanceJobDto; planeId: number }) {
+  const plane = job.planes.find(({ id }) => id === planeId);
+  if (!plane) return null;
+  const proposal = job.trialProposal;
+  return (
+    <Panel title={`Next: trial weight in plane ${plane.name}`}>
+      {proposal && (
+        <p className="mb-4">
+          Proposed: at most <strong className="figures">{formatMass(proposal.massG)}</strong> at the
+          mark (<span className="figures">{formatDegrees(proposal.angleDeg)}</span>), radius{' '}
+          <span className="figures">{formatQuantity(plane.radiusMm, 'mm')}</span>: force{' '}
+          <span className="figures">{formatQuantity(proposal.forceN, 'N')}</span>,{' '}
+          <span className="figures">{formatNumber(proposal.forcePctOfLoad)}</span> % of the load it
+          rests on ({proposal.basis}). At the mark the answer comes out right whichever way degrees
+          are counted.
+        </p>
+      )}
+      <WeightForm job={job} plane={plane} purpose="trial" proposedG={proposal?.massG ?? null} />
+    </Panel>
+  );
+}
+
+function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readonly number[] }) {
+  const answer = job.accepted.at(-1);
+  const fitted = planeIds.length < job.planes.length;
+  return (
+    <>
+      <Panel title="Answer card" note={answer && `answer ${answer.number}`}>
+        {answer && <AnswerCard job={job} answer={answer} />}
+      </Panel>
+      {planeIds.map((planeId) => {
+        const plane = job.planes.find(({ id }) => id === planeId);
+        const proposed = answer?.planes.find((candidate) => candidate.planeId === planeId);
+        return (
+          plane && (
+            <Panel key={planeId} title={`Next: fit card, plane ${plane.name}`}>
+              <WeightForm
+                job={job}
+                plane={plane}
+                purpose="correction"
+                proposedG={proposed?.massG ?? null}
+              />
+            </Panel>
+          )
+        );
+      })}
+      {fitted && (
+        <Panel
+          title={planeIds.length === 0 ? 'Next: check run' : 'or, if nothing goes there: check run'}
+        >
+          <RunForm job={job} purpose="check" button="Record check run" />
+        </Panel>
+      )}
+    </>
+  );
+}
+
+function Decide({ job }: { job: BalanceJobDto }) {
+  return (
+    <>
+      <Panel title="Check run">
+        <CheckTable job={job} />
+      </Panel>
+      <Panel title="Good enough? Sign the job record">
+        <SignForm job={job} />
+      </Panel>
+      <Panel title="or trim with the same coefficients">
+        <AnswerStep job={job} />
+      </Panel>
+      <Panel title="or check again">
+        <RunForm job={job} purpose="check" button="Record another check run" />
+      </Panel>
+    </>
+  );
+}
+
+function nameOf(job: BalanceJobDto, planeId: number): string {
+  return job.planes.find(({ id }) => id === planeId)?.name ?? '';
+}

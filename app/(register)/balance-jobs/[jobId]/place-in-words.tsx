@@ -1,0 +1,30 @@
+import { clockHours, opposite } from '@/lib/domain/drawing/face-view';
+import { arcMm, positionWords } from '@/lib/domain/drawing/rotor-place';
+import { formatClock, formatDegrees, formatQuantity } from '@/lib/format';
+import type { PlaneDto, SetupDto } from '@/lib/schemas/balance-job';
+
+type PlaceInWordsProps = { plane: PlaneDto | undefined; setup: SetupDto; angleDeg: number };
+
+/** One place said in several ways, so that it can be laid out with a tape, a count or a look. */
+export function PlaceInWords({ plane, setup, angleDeg }: PlaceInWordsProps) {
+  if (!plane) return null;
+  const sense = setup.rotationFromDriveEnd === 'clockwise' ? 'cw' : 'ccw';
+  const words = positionWords(angleDeg, plane.positions);
+  return (
+    <p>
+      Plane {plane.name}: turn{' '}
+      <strong className="figures">{formatDegrees(angleDeg, 1)} against rotation</strong> from the
+      mark ({setup.mark}) ={' '}
+      <span className="figures">
+        {formatQuantity(arcMm(angleDeg, plane.radiusMm), 'mm', { decimals: 0 })}
+      </span>{' '}
+      of arc at radius <span className="figures">{formatQuantity(plane.radiusMm, 'mm')}</span>
+      {words.kind === 'at' && ` = ${words.label}`}
+      {words.kind === 'between' && `, between ${words.from} and ${words.to}`}; with the mark parked
+      on top, about <span className="figures">{formatClock(clockHours(angleDeg, sense))}</span> on
+      the clock seen from the drive end,{' '}
+      <span className="figures">{formatClock(clockHours(angleDeg, opposite(sense)))}</span> from the
+      other end.
+    </p>
+  );
+}

@@ -1,0 +1,71 @@
+import 'server-only';
+import type { WeightOnRotor } from '@/entities/balance-job';
+import type { FittedWeight, JobInput, JobRun } from '@/lib/domain/balancing/job-input';
+import type { LoadedJob, LoadedRun } from './load-job';
+
+/** What the arithmetic needs of a job: its kept runs, and what hangs on the rotor now. */
+export function jobInput(loaded: LoadedJob): JobInput {
+  const { job, planes, points } = loaded;
+  const kept = loaded.runs.filter(({ run }) => run.state === 'kept');
+  return {
+    unit: job.unit,
+    planes: planes.map(({ id, name, radiusMm, fromAM }) => ({ id, name, radiusMm, fromAM })),
+    points: points.map(({ id, label }) => ({ id, label })),
+    runs: kept.map(jobRun),
+    weightsNow: weightsNow(loaded),
+    coefficientsFrom: { kind: 'learning runs' },
+    rotor: jobRotor(loaded),
+  };
+}
+
+/** Weights of the job that are on the rotor, as the arithmetic takes them. */
+export function weightsNow({ weights }: LoadedJob): FittedWeight[] {
+  return weights
+    .filter((weight) => weight.endedAt === null)
+    .map(({ plane, massG, radiusMm, angleDeg }) => ({
+      planeId: plane.id,
+      massG,
+      radiusMm,
+      angleDeg,
+    }));
+}
+
+/** Weights of a run's snapshot, as the arithmetic takes them. */
+export function fittedWeights(state: readonly WeightOnRotor[]): FittedWeight[] {
+  return state.map(({ planeId, massG, radiusMm, angleDeg }) => ({
+    planeId,
+    massG,
+    radiusMm,
+    angleDeg,
+  }));
+}
+
+function jobRun({ run, vectors }: LoadedRun): JobRun {
+  return {
+    id: run.id,
+    label: `run ${run.number}`,
+    purpose: run.purpose,
+    speedRpm: run.speedRpm,
+    // A kept run with a reason was held first and kept by an engineer.
+    speedAccepted: Boolean(run.stateReason),
+    vectors: vectors.map(({ point, amplitude, lagDeg }) => ({
+      pointId: point.id,
+      amplitude,
+      lagDeg,
+    })),
+    weights: fittedWeights(run.weightsState),
+  };
+}
+
+function jobRotor({ job }: LoadedJob): JobInput['rotor'] {
+  const rotor = job.rotor.$;
+  if (!rotor.massKg) return null;
+  return {
+    massKg: rotor.massKg,
+    balanceGrade: rotor.balanceGrade,
+    serviceSpeedRpm: job.machine.$.nominalSpeedRpm,
+    arrangement: rotor.overhung ? 'overhung' : 'inboard',
+    tolerancePlanesApartM: rotor.bearingSpanM,
+    massCentreFromAM: rotor.centreOfMassFromAM,
+  };
+}

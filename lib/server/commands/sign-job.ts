@@ -1,0 +1,173 @@
+import 'server-only';
+import { createHash } from 'node:crypto';
+import type { EntityManager } from '@mikro-orm/postgresql';
+import type { z } from 'zod';
+import { Coefficient } from '@/entities/answer';
+import { SignOff } from '@/entities/caution';
+import { MachineEvent } from '@/entities/machine';
+import { gradeOf } from '@/lib/domain/balancing/coefficient-book';
+import { solveJob } from '@/lib/domain/balancing/solve-job';
+import { fail, ok, type Result } from '@/lib/domain/result';
+import { signJobInput } from '@/lib/schemas/balance-job-input';
+import { checkVerdict } from '../balance-job/check-verdict';
+import { jobInput } from '../balance-job/job-input';
+import { loadJob, type LoadedJob } from '../balance-job/load-job';
+import { recordCautions } from '../balance-job/record-cautions';
+import { command, type CommandContext } from '../command';
+import { balanceJobDto } from '../queries/balance-job';
+import { notFound, visibleJob } from '../scope';
+
+type Input = z.output<typeof signJobInput>;
+
+/** Signs and closes a job: the rotor's state is known, the record frozen with its hash. */
+export const signJob = command(
+  { name: 'signJob', permission: 'balanceJob:sign', input: signJobInput },
+  async (context, input) => {
+    const { em, actor, now, audit } = context;
+    const job = await visibleJob(context, input.jobId);
+    if (!job) return notFound('balance job');
+    const loaded = await loadJob(em, job);
+    const refusal = notReady(loaded, input);
+    if (refusal) return refusal;
+    makePermanent(loaded, input);
+    job.state = 'signed';
+    job.closedAt = now;
+    job.closingNote = input.reason || null;
+    keepEstimates(em, loaded, now);
+    recordEvent(context, loaded);
+    recordCautions(
+      em,
+      { jobId: job.id, personId: actor.personId, now, step: 'sign' },
+      ['SAF-14'],
+      input.areaOwner,
+    );
+    await em.flush();
+    const contentHash = await freeze(context, loaded, input);
+    audit({
+      siteId: job.site.id,
+      entity: 'BalanceJob',
+      entityId: job.id,
+      before: { state: 'answered' },
+      after: { state: 'signed', contentHash, areaOwner: input.areaOwner },
+      reason: input.reason || null,
+    });
+    return ok({ jobId: job.id, contentHash });
+  },
+);
+
+function notReady(loaded: LoadedJob, input: Input): Result<never> | null {
+  if (loaded.step.step === 'closed') return fail('closed', 'This job is closed already.');
+  if (loaded.step.step !== 'decide')
+    return fail('no-check', 'A job is signed after a check run with the weights as they stay.');
+  const temporary = loaded.weights.filter(
+    ({ id, endedAt, permanent }) =>
+      endedAt === null && !permanent && !input.permanentWeightIds.includes(id),
+  );
+  const [first] = temporary;
+  if (first)
+    return fail(
+      'temporary',
+      `The ${first.massG} g in plane ${first.plane.$.name} is not said to be permanent. Make it permanent and tick it, or take it off and check again.`,
+      'permanentWeightIds',
+    );
+  const missed = missedTargets(loaded);
+  if (missed.length > 0 && input.reason === '')
+    return fail(
+      'reason-needed',
+      `${missed.join(' ')} Say why the job is signed all the same.`,
+      'reason',
+    );
+  return null;
+}
+
+function missedTargets(loaded: LoadedJob): string[] {
+  const check = checkVerdict(loaded);
+  if (!check) return [];
+  const { job } = loaded;
+  const target = job.targets.oneX;
+  const above = check.points.filter(({ now }) => target !== null && now > target);
+  const off = check.points.filter(
+    ({ miss, band }) => miss !== null && band !== null && miss > band,
+  );
+  return [
+    ...(above.length > 0
+      ? [`The 1x target of ${target} ${job.unit} is missed at ${labels(above)}.`]
+      : []),
+    ...(off.length > 0 ? [`The check run is not as predicted at ${labels(off)}.`] : []),
+  ];
+}
+
+function labels(points: readonly { label: string }[]): string {
+  return points.map(({ label }) => label).join(', ');
+}
+
+function makePermanent({ weights }: LoadedJob, { permanentWeightIds }: Input) {
+  for (const weight of weights) {
+    if (weight.endedAt === null && permanentWeightIds.includes(weight.id)) weight.permanent = true;
+  }
+}
+
+/** What this job taught beyond its trials: the fit over all its runs. */
+function keepEstimates(em: EntityManager, loaded: LoadedJob, now: Date) {
+  const { job } = loaded;
+  const solution = solveJob(jobInput(loaded));
+  if (!solution.ok || !solution.value.allRuns) return;
+  for (const h of solution.value.allRuns.coefficients) {
+    em.create(Coefficient, {
+      rotor: job.rotor,
+      plane: h.planeId,
+      point: h.pointId,
+      setup: job.setup,
+      speedRpm: solution.value.speed.meanRpm,
+      unit: job.unit,
+      rePerGmm: h.rePerGmm,
+      imPerGmm: h.imPerGmm,
+      source: 'fit over all runs',
+      job,
+      grade: gradeOf(null),
+      madeAt: now,
+    });
+  }
+}
+
+function recordEvent({ em, actor, now }: CommandContext, { job, weights }: LoadedJob) {
+  const on = weights.filter(({ endedAt }) => endedAt === null);
+  em.create(MachineEvent, {
+    machine: job.machine,
+    at: now,
+    kind: 'balance',
+    text: `Balanced, job ${job.number}: ${on.map(({ massG, plane }) => `${massG} g in plane ${plane.$.name}`).join(', ')}`,
+    breaksTrend: true,
+    balanceJobId: job.id,
+    person: actor.personId,
+  });
+}
+
+async function freeze(
+  { em, actor, now }: CommandContext,
+  loaded: LoadedJob,
+  { statement, areaOwner }: Input,
+): Promise<string> {
+  const content = { ...(await balanceJobDto(em, await loadJob(em, loaded.job))), areaOwner };
+  const contentHash = createHash('sha256').update(canonicalJson(content)).digest('hex');
+  em.create(SignOff, {
+    job: loaded.job,
+    person: actor.personId,
+    personName: actor.name,
+    role: actor.role,
+    statement,
+    at: now,
+    contentHash,
+    content,
+  });
+  return contentHash;
+}
+
+/** JSON with sorted keys, as the database hands it back in any order. */
+export function canonicalJson(value: unknown): string {
+  return JSON.stringify(value, (_key, inner: unknown) =>
+    inner !== null && typeof inner === 'object' && !Array.isArray(inner)
+      ? Object.fromEntries(Object.entries(inner).sort(([a], [b]) => (a < b ? -1 : 1)))
+      : inner,
+  );
+}
