@@ -35,6 +35,12 @@ export function formatQuantity(value: number, unit: string, options: NumberOptio
   return unit === '' ? number : `${number}${NO_BREAK}${unit.replaceAll(' ', NO_BREAK)}`;
 }
 
+/** A setting as it stands, at most 6 significant digits and no zeros added: “2560 Hz”. */
+export function formatExact(value: number, unit: string, decimalMark: DecimalMark = '.'): string {
+  const text = String(Number(value.toPrecision(6))).replace('.', decimalMark);
+  return unit === '' ? text : `${text}${NO_BREAK}${unit.replaceAll(' ', NO_BREAK)}`;
+}
+
 /** Grams to a tenth: “92.2 g”. */
 export function formatMass(massG: number, decimalMark: DecimalMark = '.'): string {
   return formatQuantity(massG, 'g', { decimals: 1, decimalMark });

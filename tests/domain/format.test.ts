@@ -136,6 +136,14 @@ describe('axes', () => {
   });
 });
 
+describe('settings', () => {
+  it('stand as they are, without zeros that nobody entered', () => {
+    expect(plain(format.formatExact(2560, 'Hz'))).toBe('2560 Hz');
+    expect(plain(format.formatExact(5128.205128, 'Hz', ','))).toBe('5128,21 Hz');
+    expect(format.formatExact(10, '')).toBe('10');
+  });
+});
+
 describe('words', () => {
   it('name zones and roles', () => {
     expect(format.formatZone('C')).toBe('C, put right soon');
