@@ -5,7 +5,7 @@ export type ZoneLetter = 'A' | 'B' | 'C' | 'D';
 export type Reason = { code: string; message: string };
 
 /** Which uploads a list shows. */
-export type InTrayFilter = { state: UploadState | 'open' | 'all'; siteId: number | null };
+export type InTrayFilter = { state: UploadState | 'open' | 'all' };
 
 /** One file of the in-tray with the record made of it, if there is one. */
 export type InTrayRow = {
@@ -99,3 +99,19 @@ export type UploadPageDto = {
   /** The point whose names stand in the file's name, where only one does. */
   suggestedPointId: number | null;
 };
+
+/** What became of one file that was dropped. */
+export type UploadOutcome = {
+  fileName: string;
+  received: {
+    uploadId: number;
+    questions: string[];
+    problem: string | null;
+    layoutName: string | null;
+  } | null;
+  /** Why it was refused, with the address of the file that is here already where that is why. */
+  refusal: { message: string; link: string | null } | null;
+};
+
+/** A point files may be dropped for, with its site. */
+export type DropPoint = PointChoice & { siteId: number };

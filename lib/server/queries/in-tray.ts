@@ -16,7 +16,7 @@ export const IN_TRAY_ROWS = 200;
 export const inTray = query(
   'measurement:read',
   async (context, filter: InTrayFilter): Promise<InTrayDto> => {
-    const sites = sitesOf(context, filter.siteId);
+    const sites = sitesOf(context);
     const counts = await countsOf(context, sites);
     const states = statesOf(filter.state);
     const rows = await context.em
@@ -129,7 +129,6 @@ function statesOf(state: InTrayFilter['state']): UploadState[] {
 }
 
 // Site 0 does not exist: `in ()` is no SQL.
-function sitesOf({ siteIds }: QueryContext, siteId: number | null): number[] {
-  const seen = siteId === null ? siteIds : siteIds.filter((id) => id === siteId);
-  return seen.length === 0 ? [0] : seen;
+function sitesOf({ siteIds }: QueryContext): number[] {
+  return siteIds.length === 0 ? [0] : siteIds;
 }

@@ -63,14 +63,14 @@ beforeAll(async () => {
 
 describe('the in-tray', () => {
   it('lists waiting before kept, with counts', async () => {
-    const tray = await inTray(reader, { state: 'all', siteId: null });
+    const tray = await inTray(reader, { state: 'all' });
     expect(tray.counts).toEqual({ waiting: 1, held: 0, kept: 1, withdrawn: 0 });
     expect(tray.rows.map(({ state }) => state)).toEqual(['waiting', 'kept']);
     expect(tray.rows[1]).toMatchObject({
       point: { label: 'B-H', machineTag: 'EF-101' },
       record: { id: recordId, zone: 'C', reasons: [] },
     });
-    const open = await inTray(reader, { state: 'open', siteId: plant.home.siteId });
+    const open = await inTray(reader, { state: 'open' });
     expect(open).toMatchObject({ found: 1, rows: [{ uploadId, state: 'waiting', record: null }] });
     expect(await inTrayCount(reader, undefined)).toBe(1);
   });

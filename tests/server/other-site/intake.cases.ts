@@ -2,6 +2,7 @@ import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
 import { keepHeld, lineThrough, rehome } from '@/lib/server/commands/settle-record';
 import { reopenUpload, withdrawUpload } from '@/lib/server/commands/settle-upload';
+import { dropPoints } from '@/lib/server/queries/drop-points';
 import { inTray } from '@/lib/server/queries/in-tray';
 import { inTrayCount } from '@/lib/server/queries/in-tray-count';
 import { spectrumData, waveformData } from '@/lib/server/queries/reading-data';
@@ -111,8 +112,7 @@ export const cases: OtherSiteCase[] = [
     expects: 'empty',
     run: async (foreigner, plant) => {
       await waitingAtHome(plant);
-      const here = { state: 'all' as const, siteId: plant.home.siteId };
-      return (await inTray(foreigner, here)).rows;
+      return (await inTray(foreigner, { state: 'all' })).rows;
     },
   },
   {
@@ -122,6 +122,12 @@ export const cases: OtherSiteCase[] = [
       await waitingAtHome(plant);
       return Array.from({ length: await inTrayCount(foreigner, undefined) });
     },
+  },
+  {
+    name: 'dropPoints',
+    expects: 'empty',
+    run: async (foreigner, plant) =>
+      (await dropPoints(foreigner, undefined)).filter(({ siteId }) => siteId === plant.home.siteId),
   },
   {
     name: 'uploadPage',
