@@ -12,8 +12,8 @@ export function run(program, args, { show = false, ...options } = {}) {
       output += chunk;
       if (show) stream.write(chunk);
     };
-    child.stdout.on('data', take(process.stdout));
-    child.stderr.on('data', take(process.stderr));
+    child.stdout?.on('data', take(process.stdout));
+    child.stderr?.on('data', take(process.stderr));
     child.on('error', reject);
     child.on('close', (code) => resolve({ code: code ?? 1, output }));
   });
