@@ -8,7 +8,7 @@ import {
 } from '@/lib/domain/drawing/train-columns';
 import type { ZoneLetter } from '@/lib/format';
 import { ZoneStamp } from '@/components/ui/zone-stamp';
-import { TrainDrawing } from './train-drawing';
+import { TrainDrawing, type Drive } from './train-drawing';
 
 export type TrainPoint = { id: number; label: string; zone: ZoneLetter | null; href: string };
 
@@ -18,8 +18,6 @@ export type TrainBearing = {
   part: TrainPart;
   points: readonly TrainPoint[];
 };
-
-export type Drive = 'direct' | 'belt' | 'gear' | 'variable speed';
 
 type MachineTrainProps = {
   /** Names it for screen readers: the machine's tag and name. */

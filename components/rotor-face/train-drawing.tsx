@@ -1,5 +1,6 @@
 import type { TrainBody, TrainPart } from '@/lib/domain/drawing/train-columns';
-import type { Drive } from './machine-train';
+
+export type Drive = 'direct' | 'belt' | 'gear' | 'variable speed';
 
 type TrainDrawingProps = {
   columns: readonly { readonly part: TrainPart; readonly bearing: boolean }[];

@@ -3,7 +3,13 @@ import { RowKeys } from '@/components/register/row-keys';
 import { Badge } from '@/components/ui/badge';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { ZoneStamp } from '@/components/ui/zone-stamp';
-import { formatBytes, formatDateTime, formatNumber, type DecimalMark } from '@/lib/format';
+import {
+  formatBytes,
+  formatDateTime,
+  formatNumber,
+  formatQuantity,
+  type DecimalMark,
+} from '@/lib/format';
 import { routes } from '@/lib/routes';
 import type { InTrayRow } from '@/lib/schemas/in-tray';
 
@@ -14,7 +20,47 @@ type UploadTableProps = {
 };
 
 /** Files with what became of them; what is held says why and what can be done. */
-export function UploadTable({ rows, mayDecide, decimalMark }: UploadTableProps) {
+export function UploadTable(props: UploadTableProps) {
+  return (
+    <>
+      <ul className="flex flex-col divide-y divide-rule sm:hidden">
+        {props.rows.map((row) => (
+          <UploadCard key={row.uploadId} {...props} row={row} />
+        ))}
+      </ul>
+      <div className="max-sm:hidden">
+        <WideTable {...props} />
+      </div>
+    </>
+  );
+}
+
+/** On a phone one under the other: a table would hide what is held and why. */
+function UploadCard({ row, mayDecide, decimalMark }: UploadRowProps) {
+  const { record, point, site } = row;
+  return (
+    <li className="flex flex-col gap-1 py-4">
+      <span className="flex flex-wrap items-center gap-2">
+        <Link className="link font-semibold break-all" href={addressOf(row)}>
+          {row.fileName}
+        </Link>
+        <Badge>{row.state}</Badge>
+        {record && <ZoneStamp zone={record.zone} size="small" />}
+      </span>
+      <span className="text-ink-soft">
+        {point ? `${point.machineTag} ${point.label}, ` : ''}
+        {formatDateTime(record?.takenAt ?? row.at, site.timeZone)}
+        {record?.overallMmS != null && (
+          <>, {formatQuantity(record.overallMmS, 'mm/s rms', { decimals: 2, decimalMark })}</>
+        )}
+      </span>
+      <Remarks row={row} />
+      {mayDecide && row.state === 'held' && record && <Decide recordId={record.id} />}
+    </li>
+  );
+}
+
+function WideTable({ rows, mayDecide, decimalMark }: UploadTableProps) {
   return (
     <RowKeys>
       <Table caption="Files, held first, then waiting, newest on top">
@@ -46,7 +92,7 @@ function UploadRow({ row, mayDecide, decimalMark }: UploadRowProps) {
   return (
     <tr>
       <RowHead>
-        <Link className="link break-all" href={addressOf(row)}>
+        <Link className="link block min-w-44 break-all" href={addressOf(row)}>
           {row.fileName}
         </Link>
         <span className="block text-xs font-normal text-ink-soft">

@@ -1,7 +1,18 @@
 import { normaliseDeg } from '../units';
 import type { FittedWeight, JobInput, JobRun } from './job-input';
 import { weightsKey } from './weight-steps';
-import type { SlipInput } from './slip-tests';
+
+/** A check run that missed its prediction, and what is known of the fitting before it. */
+export type SlipInput = {
+  readonly job: JobInput;
+  readonly checkRunId: number;
+  /** The weights fitted just before the check run, as entered. */
+  readonly fitted: readonly FittedWeight[];
+  /** Pitch of fixed positions, degrees, where weights go to numbered positions. */
+  readonly pitchDeg?: number | null;
+  /** Another radius at which the weight could hang, mm. */
+  readonly otherRadiusMm?: number | null;
+};
 
 /** A job up to a check run, the check run, and the weights fitted for it. */
 export type SlipStory = {

@@ -5,21 +5,9 @@ import { buildAnswer } from './build-answer';
 import { rootMeanSquare } from './influence-fit';
 import type { FittedWeight, JobInput, JobRun } from './job-input';
 import { missOf, predictRun } from './predict-run';
-import { slipHypotheses, type SlipHypothesis } from './slip-hypotheses';
+import { slipHypotheses, type SlipHypothesis, type SlipInput } from './slip-hypotheses';
 import { solveJob } from './solve-job';
 import { polarUnbalance, unbalanceByPlane, type PolarUnbalance } from './weights-ledger';
-
-/** A check run that missed its prediction, and what is known of the fitting before it. */
-export type SlipInput = {
-  readonly job: JobInput;
-  readonly checkRunId: number;
-  /** The weights fitted just before the check run, as entered. */
-  readonly fitted: readonly FittedWeight[];
-  /** Pitch of fixed positions, degrees, where weights go to numbered positions. */
-  readonly pitchDeg?: number | null;
-  /** Another radius at which the weight could hang, mm. */
-  readonly otherRadiusMm?: number | null;
-};
 
 /** How well one slip explains a check run. */
 export type SlipTest = {

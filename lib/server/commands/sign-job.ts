@@ -9,6 +9,7 @@ import { gradeOf } from '@/lib/domain/balancing/coefficient-book';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { signJobInput } from '@/lib/schemas/balance-job-input';
+import { canonicalJson } from '../balance-job/canonical-json';
 import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
@@ -161,13 +162,4 @@ async function freeze(
     content,
   });
   return contentHash;
-}
-
-/** JSON with sorted keys, as the database hands it back in any order. */
-export function canonicalJson(value: unknown): string {
-  return JSON.stringify(value, (_key, inner: unknown) =>
-    inner !== null && typeof inner === 'object' && !Array.isArray(inner)
-      ? Object.fromEntries(Object.entries(inner).sort(([a], [b]) => (a < b ? -1 : 1)))
-      : inner,
-  );
 }

@@ -6,6 +6,7 @@ import { clockDoubts, placeDoubts } from '@/lib/domain/intake/record-doubts';
 import { ok, type Result } from '@/lib/domain/result';
 import { decodeSamples, encodeSamples } from '../samples';
 import { deriveRecord, type DerivedFacts, type RawWaveform } from './derive';
+import { createOverview } from './overview';
 import type { PointContext } from './point-context';
 import { pointHistory } from './point-history';
 import { clearFindings, writeFindings } from './write-findings';
@@ -66,6 +67,7 @@ export async function buildRecord(
     note: facts.note,
   });
   createWaveform(em, record, raw);
+  createOverview(em, record, raw.samples, facts.now);
   writeFindings(em, { record, context, facts: derived.value, now: facts.now });
   return ok({ record, facts: derived.value });
 }

@@ -38,7 +38,7 @@ export function writeFindings(em: EntityManager, findings: Findings): void {
 
 /** Takes away what was derived, before it is made anew. */
 export async function clearFindings(em: EntityManager, recordId: number): Promise<void> {
-  await em.nativeDelete(Derived, { record: recordId });
+  await em.nativeDelete(Derived, { record: recordId, method: METHOD });
   await em.nativeDelete(Reading, { record: recordId });
   await em.nativeDelete(OneXVector, { record: recordId });
 }

@@ -3,12 +3,12 @@ import { Derived, Waveform } from '@/entities/measured-record';
 import { columnMaxima } from '@/lib/domain/drawing/spectrum-lines';
 import { scaled } from '@/lib/domain/intake/signal-scale';
 import type { AmplitudeSpectrum } from '@/lib/domain/signal/amplitude-spectrum';
-import { downsampleMinMax } from '@/lib/domain/signal/downsample-min-max';
 import { envelopeSpectrum } from '@/lib/domain/signal/envelope';
 import { tachoEdges } from '@/lib/domain/signal/tacho-edges';
 import type { SpectrumDataDto, SpectrumKind, WaveformDataDto } from '@/lib/schemas/reading-page';
 import { METHOD, readDerived, storedSpectrum } from '../measure/derived-result';
 import { loadRaw } from '../measure/keep-waveform';
+import { loadCurve, loadTacho, waveformFacts } from '../measure/load-curve';
 import { query, type QueryContext } from '../query';
 import { visibleRecord } from '../scope';
 
@@ -24,27 +24,48 @@ const ENVELOPE_TOP_HZ = 1000;
 export const waveformData = query(
   'measurement:read',
   async (context, args: { recordId: number } & Stretch): Promise<WaveformDataDto | null> => {
-    const { recordId, from, to, columns } = args;
-    if (!(await isStoredHere(context, recordId))) return null;
-    const raw = await loadRaw(context.em, recordId);
-    const { sampleRateHz, samples, scale, quantity } = raw;
-    const first = Math.min(samples.length - 1, Math.max(0, Math.floor((from ?? 0) * sampleRateHz)));
-    const last = to === null ? samples.length : Math.ceil(to * sampleRateHz) + 1;
-    const part = scaled(samples.subarray(first, Math.max(first + 1, last)), scale);
-    const { indices, values } = downsampleMinMax(part, columns);
-    const edges = raw.tacho === null ? null : tachoEdges(raw.tacho, sampleRateHz);
-    const [fromS, toS] = [first / sampleRateHz, (first + part.length) / sampleRateHz];
-    const turns = edges?.ok ? edges.value.edgesS.filter((at) => at >= fromS && at <= toS) : [];
+    const { recordId, columns } = args;
+    const { em } = context;
+    const record = await visibleRecord(context, recordId);
+    const stored = record && (await waveformFacts(em, recordId));
+    if (!stored) return null;
+    const { sampleRateHz, sampleCount, scale, quantity } = stored;
+    const part = partOf(args, stored);
+    const { indices, values } = await loadCurve(em, recordId, stored, { ...part, columns });
     return {
-      seconds: Array.from(indices, (i) => (first + i) / sampleRateHz),
-      values: Array.from(values),
-      sampleCount: part.length,
+      seconds: Array.from(indices, (i) => i / sampleRateHz),
+      values: Array.from(values, (value) => value * scale),
+      sampleCount: part.count,
       unit: SHOWN_UNITS[quantity],
-      durationS: samples.length / sampleRateHz,
-      turns: turns.length <= TURNS_SENT ? Array.from(turns) : [],
+      durationS: sampleCount / sampleRateHz,
+      turns: stored.tachoFormat ? await turnsIn(em, recordId, sampleRateHz, part) : [],
     };
   },
 );
+
+function partOf(
+  { from, to }: Stretch,
+  { sampleRateHz, sampleCount }: { sampleRateHz: number; sampleCount: number },
+) {
+  const first = Math.min(sampleCount - 1, Math.max(0, Math.floor((from ?? 0) * sampleRateHz)));
+  const last = to === null ? sampleCount : Math.ceil(to * sampleRateHz) + 1;
+  return { first, count: Math.max(1, Math.min(sampleCount, last) - first) };
+}
+
+/** The tacho's edges in a part; none where there are more than can be told apart. */
+async function turnsIn(
+  em: QueryContext['em'],
+  recordId: number,
+  sampleRateHz: number,
+  { first, count }: { first: number; count: number },
+): Promise<number[]> {
+  const tacho = await loadTacho(em, recordId);
+  const edges = tacho && tachoEdges(tacho, sampleRateHz);
+  if (!edges?.ok) return [];
+  const [fromS, toS] = [first / sampleRateHz, (first + count) / sampleRateHz];
+  const turns = edges.value.edgesS.filter((at) => at >= fromS && at <= toS);
+  return turns.length <= TURNS_SENT ? Array.from(turns) : [];
+}
 
 /** Lines of a record's spectrum (Hz), reduced by their maxima so that peaks stay. */
 export const spectrumData = query(

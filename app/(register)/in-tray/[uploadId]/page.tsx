@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { notFound } from 'next/navigation';
+import { cache } from 'react';
 import { Badge } from '@/components/ui/badge';
 import { Notice } from '@/components/ui/notice';
 import { PageHead } from '@/components/ui/page-head';
@@ -17,14 +18,17 @@ import { SettleUpload } from './settle-upload';
 
 type Place = { params: Promise<{ uploadId: string }> };
 
+/** Once per request: the title needs it too, and the whole file is read for it. */
+const pageOf = cache(async (uploadId: number) => uploadPage(await requireActor(), uploadId));
+
 export async function generateMetadata({ params }: Place): Promise<Metadata> {
-  const page = await uploadPage(await requireActor(), idOf((await params).uploadId));
+  const page = await pageOf(idOf((await params).uploadId));
   return { title: page ? `${page.upload.fileName} · In-tray` : 'Not found' };
 }
 
 export default async function UploadPage({ params }: Place) {
   const actor = await requireActor();
-  const page = await uploadPage(actor, idOf((await params).uploadId));
+  const page = await pageOf(idOf((await params).uploadId));
   if (!page) notFound();
   const { upload, layoutName } = page;
   const { fileName, sizeBytes, at, person, site } = upload;

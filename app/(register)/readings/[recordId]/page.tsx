@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
+import { cache } from 'react';
 import { allows } from '@/lib/domain/access/permissions';
 import { formatDateTime } from '@/lib/format';
 import type { ReadingPageDto } from '@/lib/schemas/reading-page';
@@ -19,15 +20,18 @@ type Place = {
   searchParams: Promise<{ decide?: string; spectrum?: string }>;
 };
 
+/** Once per request: the title needs it too. */
+const pageOf = cache(async (recordId: number) => readingPage(await requireActor(), recordId));
+
 export async function generateMetadata({ params }: Place): Promise<Metadata> {
-  const page = await readingPage(await requireActor(), idOf((await params).recordId));
+  const page = await pageOf(idOf((await params).recordId));
   return { title: page ? titleOf(page) : 'Not found' };
 }
 
 export default async function ReadingPage({ params, searchParams }: Place) {
   const actor = await requireActor();
   const recordId = idOf((await params).recordId);
-  const page = await readingPage(actor, recordId);
+  const page = await pageOf(recordId);
   if (!page) notFound();
   const { decide, spectrum } = await searchParams;
   const kind = kindOf(spectrum);
