@@ -10,6 +10,7 @@ import { fail, type Failure, type Result } from '@/lib/domain/result';
 import type { Actor } from '@/lib/schemas/actor';
 import { constraintFailure } from './constraint-failures';
 import { getEntityManager } from './db';
+import { openSiteIds } from './query';
 
 export type AuditEntry = {
   readonly siteId: number | null;
@@ -80,7 +81,7 @@ async function inTransaction<Value>(
         audited += 1;
         em.persist(auditRow(em, { actor, name, now }, entry));
       };
-      const siteIds = actor.sites.map((site) => site.id);
+      const siteIds = openSiteIds(actor);
       const result = await change({ actor, em, siteIds, now, audit });
       if (!result.ok) throw new RolledBack(result.failure);
       if (audited === 0) throw new Error(`${name} wrote no audit row`);

@@ -16,7 +16,7 @@ const SQL = `
                         order by number limit 1) first on true
     left join lateral (select id from run where job_id = j.id and purpose = 'check' and state = 'kept'
                         order by number desc limit 1) last on true
-   where j.site_id = any(?)
+   where j.site_id in (?)
    order by j.closed_at is not null, coalesce(j.closed_at, j.opened_at) desc
    limit 200`;
 
