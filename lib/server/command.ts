@@ -8,6 +8,7 @@ import { Site } from '@/entities/site';
 import { allows, type Permission } from '@/lib/domain/access/permissions';
 import { fail, type Failure, type Result } from '@/lib/domain/result';
 import type { Actor } from '@/lib/schemas/actor';
+import { clockNow } from './clock';
 import { constraintFailure } from './constraint-failures';
 import { getEntityManager } from './db';
 import { openSiteIds } from './query';
@@ -76,7 +77,7 @@ async function inTransaction<Value>(
   try {
     return await forked.transactional(async (em) => {
       let audited = 0;
-      const now = new Date();
+      const now = clockNow();
       const audit = (entry: AuditEntry) => {
         audited += 1;
         em.persist(auditRow(em, { actor, name, now }, entry));

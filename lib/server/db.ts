@@ -9,9 +9,9 @@ type Orm = { em: EntityManager; close: () => Promise<void> };
 type Slot = { key: string; orm: Promise<Orm> };
 const holder = globalThis as typeof globalThis & { evenrunOrm?: Slot };
 
-/** An entity manager of its own for one query or command. */
+/** An entity manager of its own for one query or command; inside a transaction it joins that one. */
 export async function getEntityManager(): Promise<EntityManager> {
-  return (await getOrm()).em.fork();
+  return (await getOrm()).em.fork({ keepTransactionContext: true });
 }
 
 /** Ends the pool; for scripts and tests. */

@@ -2,6 +2,7 @@ import 'server-only';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { allows, type Permission } from '@/lib/domain/access/permissions';
 import type { Actor } from '@/lib/schemas/actor';
+import { clockNow } from './clock';
 import { getEntityManager } from './db';
 
 export type QueryContext = {

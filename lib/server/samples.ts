@@ -1,3 +1,4 @@
+import 'server-only';
 /** How samples stand in a bytea column; little-endian. */
 export type SampleFormat = 'f32le' | 'f64le';
 

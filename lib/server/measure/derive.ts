@@ -1,3 +1,4 @@
+import 'server-only';
 import { scaled } from '@/lib/domain/intake/signal-scale';
 import { ok, type Result } from '@/lib/domain/result';
 import { analyseWaveform, type WaveformAnalysis } from '@/lib/domain/signal/analyse-waveform';

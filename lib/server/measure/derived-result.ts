@@ -1,3 +1,4 @@
+import 'server-only';
 import { z } from 'zod';
 import type { Derived } from '@/entities/measured-record';
 import type { AmplitudeSpectrum } from '@/lib/domain/signal/amplitude-spectrum';

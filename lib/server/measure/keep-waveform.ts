@@ -1,3 +1,4 @@
+import 'server-only';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { MeasuredRecord, Waveform, type HoldReason } from '@/entities/measured-record';
 import { Person } from '@/entities/person';

@@ -1,3 +1,4 @@
+import 'server-only';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { Waveform } from '@/entities/measured-record';
 import { downsampleMinMax, type ReducedCurve } from '@/lib/domain/signal/downsample-min-max';

@@ -1,3 +1,4 @@
+import 'server-only';
 import type { EntityManager, Loaded } from '@mikro-orm/postgresql';
 import { Point } from '@/entities/bearing';
 import { LimitUse, type LimitSet } from '@/entities/limit-set';

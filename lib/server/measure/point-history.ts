@@ -1,3 +1,4 @@
+import 'server-only';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { PointHistory } from '@/lib/domain/intake/record-doubts';
 import { DISTANCE_DOUBT_DB, LEVELS_COMPARED } from '@/lib/domain/intake/record-doubts';

@@ -1,3 +1,4 @@
+import 'server-only';
 const WORDS: Readonly<Record<string, string>> = { 'm/s2': 'm/s²', um: 'µm' };
 
 /** A unit as people write it: `m/s2` is “m/s²”, `um` is “µm”. */
