@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Upload } from '@/entities/upload';
 import { MeasuredRecord, Waveform } from '@/entities/measured-record';
 import type { Actor } from '@/lib/schemas/actor';
@@ -7,18 +7,22 @@ import { UPLOAD_BYTES_MAX } from '@/lib/schemas/upload-input';
 import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
 import { getEntityManager } from '@/lib/server/db';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import { bytesOf, failureOf, ONE_COLUMN_G, sineCsv, valueOf } from './records-of-test';
 
 let em: EntityManager;
 let plant: SmallPlant;
+let close: () => Promise<void>;
 let technician: Actor;
 
 beforeAll(async () => {
+  ({ plant, close } = await openPlant());
   em = await getEntityManager();
-  plant = await seedSmallPlant(em);
   technician = plant.at('technician');
 });
+
+afterAll(() => close());
 
 const receive = (fileName: string, content: string | Uint8Array) =>
   receiveUpload(technician, {

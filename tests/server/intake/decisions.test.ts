@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { LimitSet, LimitUse } from '@/entities/limit-set';
 import { MeasuredRecord, OneXVector, Reading } from '@/entities/measured-record';
@@ -10,7 +10,8 @@ import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { keepHeld, lineThrough, rehome } from '@/lib/server/commands/settle-record';
 import { reopenUpload } from '@/lib/server/commands/settle-upload';
 import { getEntityManager } from '@/lib/server/db';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import {
   bytesOf,
   failureOf,
@@ -23,16 +24,20 @@ import {
 
 let em: EntityManager;
 let plant: SmallPlant;
+let close: () => Promise<void>;
 let technician: Actor;
 let point: number;
 let other: number;
 let serial = 0;
 
 beforeAll(async () => {
-  plant = await seedSmallPlant(await getEntityManager());
+  ({ plant, close } = await openPlant());
+
   technician = plant.at('technician');
   [point, other] = plant.home.pointIds;
 });
+
+afterAll(() => close());
 
 beforeEach(async () => {
   em = await getEntityManager();

@@ -1,11 +1,12 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Reading } from '@/entities/measured-record';
 import { getEntityManager } from '@/lib/server/db';
 import { readingPage } from '@/lib/server/queries/reading-page';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import { machineWith, ONE_COLUMN_G, uploadAndConfirm } from './records-of-test';
 
 // Measured records of the Case Western Reserve University Bearing Data Center. They state no
@@ -19,11 +20,14 @@ if (!present) {
 describe.skipIf(!present)('measured records, from file to kept reading', () => {
   let em: EntityManager;
   let plant: SmallPlant;
+  let close: () => Promise<void>;
 
   beforeAll(async () => {
+    ({ plant, close } = await openPlant());
     em = await getEntityManager();
-    plant = await seedSmallPlant(em);
   });
+
+  afterAll(() => close());
 
   it.each([
     ['normal_de_48k.csv', 48_000, 1796, 2.764],

@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Actor } from '@/lib/schemas/actor';
 import { layoutChoices } from '@/lib/schemas/upload-input';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
@@ -9,7 +9,8 @@ import { inTrayCount } from '@/lib/server/queries/in-tray-count';
 import { spectrumData, waveformData } from '@/lib/server/queries/reading-data';
 import { readingPage } from '@/lib/server/queries/reading-page';
 import { uploadedFile, uploadPage, uploadPreview } from '@/lib/server/queries/upload-page';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import {
   bytesOf,
   machineWith,
@@ -22,6 +23,7 @@ import {
 
 let em: EntityManager;
 let plant: SmallPlant;
+let close: () => Promise<void>;
 let reader: Actor;
 let recordId: number;
 let uploadId: number;
@@ -29,8 +31,8 @@ let uploadId: number;
 const all = { from: null, to: null, columns: 500 };
 
 beforeAll(async () => {
+  ({ plant, close } = await openPlant());
   em = await getEntityManager();
-  plant = await seedSmallPlant(em);
   reader = plant.at('reader');
   const place = { siteId: plant.home.siteId, limitSetId: plant.limitSetId };
   const fan = await machineWith(em, place, { tag: 'EF-101', speeds: [1480, 1480, 1480] });
@@ -60,6 +62,8 @@ beforeAll(async () => {
   });
   uploadId = valueOf(waiting).uploadId;
 });
+
+afterAll(() => close());
 
 describe('the in-tray', () => {
   it('lists waiting before kept, with counts', async () => {
@@ -135,12 +139,19 @@ describe('a record', () => {
     expect(whole).toMatchObject({ sampleCount: 20_480, unit: 'm/s²', durationS: 2 });
     expect(whole?.seconds).toHaveLength(1000);
     expect(whole?.turns).toHaveLength(49);
+    const text = scenarioFile('S17_EF101_B_H_tacho.csv');
+    const samples = new TextDecoder()
+      .decode(text)
+      .trim()
+      .split('\n')
+      .slice(1)
+      .map((row) => Number(row.split(',')[1]));
+    expect(Math.max(...whole!.values)).toBe(Math.max(...samples));
+    expect(Math.min(...whole!.values)).toBe(Math.min(...samples));
     const near = await waveformData(reader, { recordId, from: 0.5, to: 0.51, columns: 500 });
     expect(near?.seconds[0]).toBe(0.5);
     expect(near?.sampleCount).toBe(104);
-    const text = scenarioFile('S17_EF101_B_H_tacho.csv');
-    const rows = new TextDecoder().decode(text).split('\n');
-    expect(near?.values[0]).toBe(Number(rows[5121]?.split(',')[1]));
+    expect(near!.values[0]).toBe(samples[5120]);
   });
 
   it('has a velocity spectrum whose lines are those of the overall, and others beside it', async () => {

@@ -1,12 +1,12 @@
-import type { EntityManager } from '@mikro-orm/postgresql';
 import fc from 'fast-check';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Waveform } from '@/entities/measured-record';
 import { getEntityManager } from '@/lib/server/db';
 import { buildRecord, loadRaw } from '@/lib/server/measure/keep-waveform';
 import { loadPointContext } from '@/lib/server/measure/point-context';
 import { decodeSamples, encodeSamples } from '@/lib/server/samples';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import { valueOf } from './records-of-test';
 
 const bits = (values: Float64Array): string[] =>
@@ -49,13 +49,14 @@ describe('samples as bytes', () => {
 });
 
 describe('samples in the database', () => {
-  let em: EntityManager;
   let plant: SmallPlant;
+  let close: () => Promise<void>;
 
   beforeAll(async () => {
-    em = await getEntityManager();
-    plant = await seedSmallPlant(em);
+    ({ plant, close } = await openPlant());
   });
+
+  afterAll(() => close());
 
   it('come back bit for bit, and no flush touches what was not loaded', async () => {
     const pointId = plant.home.pointIds[0];

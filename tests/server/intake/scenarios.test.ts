@@ -1,24 +1,28 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { MeasuredRecord, OneXVector, Reading } from '@/entities/measured-record';
 import type { Actor } from '@/lib/schemas/actor';
 import type { LayoutChoicesInput } from '@/lib/schemas/upload-input';
 import { keepHeld, rehome } from '@/lib/server/commands/settle-record';
 import { getEntityManager } from '@/lib/server/db';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import { machineWith, scenarioFile, uploadAndConfirm, valueOf } from './records-of-test';
 
 // Scenarios S12, S15 and S17: invented records; expected values computed independently of this
 // project (tests/reference/data). The plant here is the same as theirs in speed and limits.
 let em: EntityManager;
 let plant: SmallPlant;
+let close: () => Promise<void>;
 let technician: Actor;
 
 beforeAll(async () => {
+  ({ plant, close } = await openPlant());
   em = await getEntityManager();
-  plant = await seedSmallPlant(em);
   technician = plant.at('technician');
 });
+
+afterAll(() => close());
 
 function expectNear(value: number | null | undefined, wanted: number, tolerance: number) {
   expect(Math.abs((value ?? NaN) - wanted), `${value} for ${wanted}`).toBeLessThanOrEqual(

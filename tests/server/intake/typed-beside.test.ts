@@ -1,18 +1,22 @@
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Actor } from '@/lib/schemas/actor';
 import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
-import { getEntityManager } from '@/lib/server/db';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import { bytesOf, failureOf, ONE_COLUMN_G, sineCsv, valueOf } from './records-of-test';
 
 let plant: SmallPlant;
+let close: () => Promise<void>;
 let technician: Actor;
 
 beforeAll(async () => {
-  plant = await seedSmallPlant(await getEntityManager());
+  ({ plant, close } = await openPlant());
+
   technician = plant.at('technician');
 });
+
+afterAll(() => close());
 
 describe('what a person types beside a file', () => {
   it.each([

@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { MeasuredRecord } from '@/entities/measured-record';
 import { ColumnLayout } from '@/entities/upload';
 import type { Actor } from '@/lib/schemas/actor';
@@ -7,7 +7,8 @@ import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
 import { reopenUpload, withdrawUpload } from '@/lib/server/commands/settle-upload';
 import { getEntityManager } from '@/lib/server/db';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
+import { openPlant } from './open-plant';
 import {
   bytesOf,
   failureOf,
@@ -19,16 +20,19 @@ import {
 
 let em: EntityManager;
 let plant: SmallPlant;
+let close: () => Promise<void>;
 let technician: Actor;
 let point: number;
 let other: number;
 
 beforeAll(async () => {
+  ({ plant, close } = await openPlant());
   em = await getEntityManager();
-  plant = await seedSmallPlant(em);
   technician = plant.at('technician');
   [point, other] = plant.home.pointIds;
 });
+
+afterAll(() => close());
 
 describe('a waiting file', () => {
   it('is withdrawn and taken up again, and confirmed once only', async () => {
