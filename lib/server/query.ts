@@ -36,7 +36,7 @@ export function query<Args, Dto>(
   const run = async (actor: Actor, args: Args) => {
     if (!allows(actor.role, permission)) throw new NotPermitted(permission);
     const em = await getEntityManager();
-    return read({ actor, em, siteIds: openSiteIds(actor), now: new Date() }, args);
+    return read({ actor, em, siteIds: openSiteIds(actor), now: clockNow() }, args);
   };
   return Object.assign(run, { kind: 'query' as const, permission });
 }
