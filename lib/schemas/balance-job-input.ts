@@ -109,12 +109,7 @@ export const fitWeightInput = z.object({
   massG: typedNumber({ what: 'the mass', unit: 'g', above: 0, max: 1_000_000 }),
   massSource: choice(['scale', 'nominal'], 'Say whether the mass was weighed or is nominal.'),
   radiusMm: typedNumber({ what: 'the radius', unit: 'mm', above: 0, max: 20_000 }),
-  angleDeg: z.union([
-    z.literal('').transform(() => null),
-    z.null(),
-    z.undefined().transform(() => null),
-    typedNumber({ what: 'the angle', unit: '°', min: 0, max: 360 }),
-  ]),
+  angleDeg: optionalNumber({ what: 'the angle', unit: '°', min: 0, max: 360 }),
   angleSense: z.enum(['against', 'with', '']).default(''),
   arcMm: optionalNumber({ what: 'the arc along the rim', unit: 'mm', min: 0 }),
   fixing: text('how the weight is fixed', 200),
