@@ -1,109 +1,75 @@
-import { mkdirSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
 import { checkNode } from './lib/check-node.mjs';
 import { ensureChromium } from './lib/chromium.mjs';
 import { ensureNpmPackages } from './lib/npm-packages.mjs';
-import { DATA, ROOT } from './lib/places.mjs';
 import { ensurePostgres } from './lib/postgres.mjs';
-import { run } from './lib/run.mjs';
-import { runMain, say } from './lib/say.mjs';
-import { startTestCluster } from './lib/test-cluster.mjs';
+import { runMain, say, Stop } from './lib/say.mjs';
+import { runSuite, SUITES } from './lib/test-suites.mjs';
+import { testSurroundings } from './lib/test-surroundings.mjs';
+import { runTool, TOOLS } from './lib/tool-checks.mjs';
 
-const TOOLS = {
-  format: ['npm', 'run', '-s', 'format:check'],
-  lint: ['npm', 'run', '-s', 'lint'],
-  types: ['npm', 'run', '-s', 'types'],
-  architecture: ['npm', 'run', '-s', 'architecture'],
-  unused: ['npm', 'run', '-s', 'unused'],
-  'type-coverage': ['npm', 'run', '-s', 'type-coverage'],
-  migrations: ['npm', 'run', '-s', 'db:check'],
-};
-const SUITES = ['domain', 'reference', 'server', 'browser'];
+const STAGES = [...Object.keys(TOOLS), ...SUITES];
+const WITH_DATABASE = ['migrations', 'server', 'browser'];
 
 const total = { passed: 0, failed: 0, skipped: 0 };
 
 await runMain(async () => {
   checkNode();
-  const wanted = onlyStages();
-  await ensurePostgres();
+  const stages = wantedStages();
+  const needsDatabase = stages.some((stage) => WITH_DATABASE.includes(stage));
+  if (needsDatabase) await ensurePostgres();
   await ensureNpmPackages();
-  if (wanted('browser')) await ensureChromium();
-  mkdirSync(DATA, { recursive: true });
-  const scratch = mkdtempSync(`${tmpdir()}/evenrun-test-`);
-  const cluster = await startTestCluster();
-  const environment = {
-    ...process.env,
-    NEXT_TELEMETRY_DISABLED: '1',
-    TEST_DATABASE_URL: cluster.url,
-    DATABASE_URL: cluster.url,
-    SESSION_SECRET: 'a secret for tests only, forty characters',
-    EVENRUN_DATA_DIR: `${scratch}/files`,
-  };
+  if (stages.includes('browser')) await ensureChromium();
+  const surroundings = await testSurroundings(needsDatabase);
   try {
-    for (const name of Object.keys(TOOLS)) if (wanted(name)) await tool(name, environment);
-    for (const name of SUITES) if (wanted(name)) await suite(name, environment, scratch);
+    for (const stage of stages)
+      if (stage in TOOLS) await tool(stage, surroundings);
+      else await suite(stage, surroundings);
   } finally {
-    await cluster.end();
-    rmSync(scratch, { recursive: true, force: true });
+    await surroundings.end();
   }
-  if (total.passed + total.failed === 0) total.failed = 1;
-  process.exitCode = total.failed > 0 ? 1 : 0;
-  const skipped = total.skipped > 0 ? `, ${total.skipped} skipped` : '';
-  say(`${total.passed} passed, ${total.failed} failed${skipped}`);
 });
 
-function onlyStages() {
+if (total.passed + total.failed === 0) total.failed = 1;
+if (total.failed > 0) process.exitCode = 1;
+const skipped = total.skipped > 0 ? `, ${total.skipped} skipped` : '';
+say(`${total.passed} passed, ${total.failed} failed${skipped}`);
+
+function wantedStages() {
   const index = process.argv.indexOf('--only');
-  if (index < 0) return () => true;
+  if (index < 0) return STAGES;
   const names = (process.argv[index + 1] ?? '').split(',');
-  return (name) => names.includes(name);
+  const unknown = names.filter((name) => !STAGES.includes(name));
+  if (unknown.length === 0) return STAGES.filter((stage) => names.includes(stage));
+  throw new Stop(`There is no stage “${unknown[0]}”. Name some of these: ${STAGES.join(', ')}.`);
 }
 
-async function tool(name, env) {
+async function tool(name, { env }) {
   const begun = Date.now();
-  const [program, ...args] = TOOLS[name];
-  const { code, output } = await run(program, args, { cwd: ROOT, env });
-  total[code === 0 ? 'passed' : 'failed'] += 1;
-  report(name, code === 0 ? 'good' : 'FAILED', begun);
-  if (code !== 0) say(output);
+  const result = await runTool(name, env);
+  if (result === null)
+    return say(`${name.padEnd(14)} left out: this tool has no settings here yet`);
+  total[result.passed ? 'passed' : 'failed'] += 1;
+  report(name, result.passed ? 'passed' : 'FAILED', begun);
+  if (!result.passed) say(result.output);
 }
 
-async function suite(name, env, scratch) {
+async function suite(name, { env, scratch }) {
   const begun = Date.now();
-  const file = `${scratch}/${name}.json`;
-  const args = ['node_modules/vitest/vitest.mjs', 'run', '--project', name];
-  const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${file}`];
-  const { code, output } = await run(process.execPath, [...args, ...reporters], {
-    cwd: ROOT,
-    env: { ...env, NO_COLOR: '1' },
-  });
-  const counts = countsOf(file);
-  // A suite that cannot even be loaded counts no test: it is one failure.
-  if (code !== 0 && counts.failed === 0) counts.failed = 1;
-  for (const key of Object.keys(total)) total[key] += counts[key];
-  report(
-    name,
-    `${counts.passed} passed, ${counts.failed} failed, ${counts.skipped} left out`,
-    begun,
-  );
-  for (const line of output.split('\n'))
-    if (/left out|skipped:/i.test(line)) say(`  ${line.trim()}`);
-  if (code !== 0) say(output);
+  const result = await runSuite(name, env, scratch);
+  if (result === null) return say(`${name.padEnd(14)} left out: it has no test yet`);
+  for (const key of Object.keys(total)) total[key] += result.counts[key];
+  const { passed, failed, skipped: omitted } = result.counts;
+  report(name, `${passed} passed, ${failed} failed, ${omitted} skipped`, begun);
+  for (const line of remarks(result.output)) say(`  ${line}`);
+  if (!result.passed) say(result.output);
 }
 
-function countsOf(file) {
-  try {
-    const result = JSON.parse(readFileSync(file, 'utf8'));
-    return {
-      passed: result.numPassedTests,
-      failed: result.numFailedTests,
-      skipped: result.numPendingTests,
-    };
-  } catch {
-    return { passed: 0, failed: 0, skipped: 0 };
-  }
+/** What tests say about checks they could not make. */
+function remarks(output) {
+  const lines = output.split('\n').map((line) => line.trim());
+  return new Set(lines.filter((line) => /^(Skipped|Left out):/i.test(line)));
 }
 
 function report(name, verdict, begun) {
-  say(`${name.padEnd(14)} ${verdict} (${((Date.now() - begun) / 1000).toFixed(0)} s)`);
+  say(`${name.padEnd(14)} ${verdict} (${Math.round((Date.now() - begun) / 1000)} s)`);
 }

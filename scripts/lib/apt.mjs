@@ -1,57 +1,52 @@
-import { Stop, say } from './say.mjs';
+import { causeOf, tellingLine } from './causes.mjs';
 import { has, run } from './run.mjs';
+import { Stop, say } from './say.mjs';
 
-/** Installs Debian packages, as root or through sudo; every way it can fail is one sentence. */
-export async function aptInstall(packages, what) {
+/**
+ * Installs Debian packages, as root or through sudo. `before` is a shell line run first with the same rights.
+ * Every way it can fail is one sentence.
+ */
+export async function aptInstall(packages, what, before = '') {
   const names = packages.join(' ');
+  const prefix = await rights(what, names);
+  say(`Installing ${what} from Debian’s packages (${names}); this can take a few minutes …`);
+  if (before) await as(prefix, ['sh', '-c', before], what, names);
+  // A first list of packages that fails still may leave what is needed within reach.
+  await run(...split([...prefix, ...APT, 'update']));
+  await as(prefix, [...APT, 'install', '-y', '--no-install-recommends', ...packages], what, names);
+}
+
+const APT = ['env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get', '-o', 'DPkg::Lock::Timeout=300'];
+
+async function rights(what, names) {
   if (!(await has('apt-get')))
     throw new Stop(
-      `${what} is missing and there is no apt-get here. Install the packages ${names} of your system, then run the command again.`,
+      `${what} is missing and there is no apt-get here. Install ${names} the way this system does, then run the command again.`,
     );
-  const prefix = await rootPrefix(what, names);
-  say(`Installing ${what} from Debian’s packages (${names}) …`);
-  await asRoot(prefix, ['apt-get', 'update']);
-  const { code, output } = await asRoot(prefix, [
-    'apt-get',
-    'install',
-    '-y',
-    '--no-install-recommends',
-    ...packages,
-  ]);
-  if (code === 0) return;
-  if (/No space left on device/i.test(output))
-    throw new Stop(
-      `The disk is full: ${what} could not be installed. Free some space and run the command again.`,
-    );
-  const last = output.trim().split('\n').at(-1) ?? '';
-  throw new Stop(
-    `apt-get could not install ${names} (${last}). Check the network and the package sources, or install them by hand, then run the command again.`,
-  );
-}
-
-/** Writes a file that only root may write. */
-export async function writeAsRoot(path, text, what) {
-  const prefix = await rootPrefix(what, path);
-  const [program, ...args] = [
-    ...prefix,
-    'sh',
-    '-c',
-    `mkdir -p "$(dirname ${path})" && cat > ${path}`,
-  ];
-  const { spawnSync } = await import('node:child_process');
-  spawnSync(program, args, { input: text });
-}
-
-async function rootPrefix(what, names) {
-  if (process.getuid?.() === 0) return [];
+  if (process.getuid() === 0) return [];
   if (await has('sudo')) return ['sudo'];
   throw new Stop(
-    `${what} is missing, and installing it needs root or sudo. As root run “apt-get install ${names}”, then run the command again.`,
+    `${what} is missing, and installing it needs root or sudo. Run “apt-get install ${names}” as root, then run the command again.`,
   );
 }
 
-function asRoot(prefix, command) {
-  const withEnvironment = ['env', 'DEBIAN_FRONTEND=noninteractive', ...command];
-  const [program, ...args] = [...prefix, ...withEnvironment];
-  return run(program, args);
+async function as(prefix, command, what, names) {
+  const { code, output } = await run(...split([...prefix, ...command]));
+  if (code === 0) return;
+  if (/a (terminal|password) is required|not in the sudoers|not allowed to/i.test(output))
+    throw new Stop(
+      `${what} is missing, and sudo does not let this user install it. Run “apt-get install ${names}” as root, then run the command again.`,
+    );
+  if (/Unable to locate package|Failed to fetch|Temporary failure|Could not resolve/i.test(output))
+    throw new Stop(
+      `${what} could not be installed: Debian’s packages cannot be reached. Check the network and /etc/apt/sources.list, then run the command again.`,
+    );
+  throw new Stop(
+    causeOf(output) ??
+      `${what} could not be installed (${tellingLine(output)}). Run “apt-get install ${names}” as root, then run the command again.`,
+  );
+}
+
+function split([program, ...args]) {
+  return [program, args];
 }

@@ -1,8 +1,9 @@
 import { createHash } from 'node:crypto';
-import { existsSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { causeOf } from './causes.mjs';
 import { ROOT } from './places.mjs';
 import { run } from './run.mjs';
-import { Stop } from './say.mjs';
+import { Stop, say } from './say.mjs';
 
 const SOURCES = [
   'app',
@@ -22,31 +23,28 @@ const SOURCES = [
 export async function buildIfStale(folder, environment) {
   const stamp = `${ROOT}${folder}/evenrun-sources`;
   const wanted = sourcesHash();
-  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted) return false;
+  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted) return;
+  say('Building the product; this takes a minute or two …');
+  // A build cut short must not pass for the one before it.
+  rmSync(stamp, { force: true });
   const { code, output } = await run(
     process.execPath,
     ['node_modules/next/dist/bin/next', 'build'],
     {
       cwd: ROOT,
-      env: { ...process.env, ...environment, EVENRUN_DIST: folder, NEXT_TELEMETRY_DISABLED: '1' },
+      env: { ...process.env, ...environment, NODE_ENV: 'production', EVENRUN_DIST: folder },
     },
   );
-  if (code !== 0) {
-    if (/ENOSPC/.test(output))
-      throw new Stop(
-        'The disk is full: the product could not be built. Free some space and run the command again.',
-      );
-    throw new Stop(
-      `The product could not be built:\n${output.trim().split('\n').slice(-40).join('\n')}`,
-    );
-  }
+  if (code !== 0) throw new Stop(buildSentence(output));
   writeFileSync(stamp, wanted);
-  return true;
 }
 
-/** The command that serves a build on the loopback interface. */
-export function serveCommand(port) {
-  return ['node_modules/next/dist/bin/next', 'start', '-H', '127.0.0.1', '-p', String(port)];
+function buildSentence(output) {
+  if (/ENOSPC|No space left on device/i.test(output)) return causeOf(output);
+  if (/heap out of memory|SIGKILL/.test(output))
+    return 'The product could not be built: the machine ran out of memory. Free about 2 GB, then run the command again.';
+  const last = output.trim().split('\n').slice(-40).join('\n');
+  return `The product could not be built. The compiler said:\n${last}`;
 }
 
 function sourcesHash() {

@@ -1,26 +1,16 @@
 import { existsSync } from 'node:fs';
+import { causeOf, tellingLine } from './causes.mjs';
 import { ROOT } from './places.mjs';
 import { postgresPrograms } from './postgres.mjs';
 import { run } from './run.mjs';
 import { Stop } from './say.mjs';
 
-/** The address of another database on the same server. */
-export function databaseUrl(url, name) {
-  const other = new URL(url);
-  other.pathname = `/${name}`;
-  return other.href;
-}
+const SEED = 'scripts/seed-if-empty.ts';
 
 /** Makes a database on a cluster of ours where it is missing, and hands back its address. */
 export async function ensureDatabase(clusterUrl, name) {
-  const psql = `${postgresPrograms()}/psql`;
-  const ask = (sql) => run(psql, [clusterUrl, '-XAtq', '-c', sql]);
-  const found = await ask(`select 1 from pg_database where datname = '${name}'`);
-  if (found.output.trim() !== '1') {
-    const made = await ask(`create database ${name}`);
-    if (made.code !== 0)
-      throw new Stop(`The database ${name} could not be made (${made.output.trim()}).`);
-  }
+  const found = await ask(clusterUrl, `select 1 from pg_database where datname = '${name}'`);
+  if (found.trim() !== '1') await ask(clusterUrl, `create database ${name}`);
   return databaseUrl(clusterUrl, name);
 }
 
@@ -31,28 +21,60 @@ export async function migrate(url) {
     ['--import', 'tsx', 'node_modules/@mikro-orm/cli/cli.js', 'migration:up'],
     { cwd: ROOT, env: { ...process.env, DATABASE_URL: url } },
   );
-  if (code === 0) return;
-  if (/No space left on device/i.test(output))
-    throw new Stop(
-      'The disk is full: the database could not be migrated. Free some space and run the command again.',
-    );
-  if (/ECONNREFUSED|ENOTFOUND|password authentication failed/i.test(output))
-    throw new Stop(
-      'The database of DATABASE_URL cannot be reached with this user and password. Check DATABASE_URL, then run the command again.',
-    );
+  if (code !== 0) throw new Stop(databaseSentence(url, output));
+}
+
+/** Fills an empty database with the demo plant; hands back what it says it did. */
+export async function seedIfEmpty(environment) {
+  if (!existsSync(`${ROOT}${SEED}`)) return '';
+  const { code, output } = await run(
+    process.execPath,
+    ['--conditions=react-server', '--import', 'tsx', SEED],
+    { cwd: ROOT, env: { ...process.env, ...environment } },
+  );
+  if (code === 0) return output.trim();
   throw new Stop(
-    `The database could not be migrated:\n${output.trim().split('\n').slice(0, 12).join('\n')}`,
+    causeOf(output) ??
+      `The demo plant could not be put into the database (${tellingLine(output)}). Mend that, then run the command again.`,
   );
 }
 
-/** Fills an empty database with the demo plant; says what it did. */
-export async function seedIfEmpty(url, environment) {
-  if (!existsSync(`${ROOT}scripts/seed-if-empty.ts`)) return '';
+function databaseUrl(url, name) {
+  const other = new URL(url);
+  other.pathname = `/${name}`;
+  return other.href;
+}
+
+/** The password goes by the environment: other users can read a program's arguments. */
+async function ask(url, sql) {
+  const { hostname, port, username, password } = new URL(url);
+  const address = ['-h', hostname, '-p', port, '-U', username, '-d', 'postgres'];
   const { code, output } = await run(
-    process.execPath,
-    ['--conditions=react-server', '--import', 'tsx', 'scripts/seed-if-empty.ts'],
-    { cwd: ROOT, env: { ...process.env, ...environment, DATABASE_URL: url } },
+    `${postgresPrograms()}/psql`,
+    [...address, '-w', '-XAtq', '-c', sql],
+    { env: { ...process.env, PGPASSWORD: decodeURIComponent(password) } },
   );
-  if (code !== 0) throw new Stop(`The demo plant could not be seeded:\n${output.trim()}`);
-  return output.trim();
+  if (code === 0) return output;
+  if (/password authentication failed/.test(output))
+    throw new Stop(
+      'The database does not accept the password in .data/pg-password. Put the right file back, or remove .data/pg to begin with an empty database.',
+    );
+  throw new Stop(causeOf(output) ?? `The database answered: ${tellingLine(output)}.`);
+}
+
+function databaseSentence(url, output) {
+  const { host, pathname, username } = new URL(url);
+  const name = pathname.slice(1);
+  if (/ECONNREFUSED|ENOTFOUND|EAI_AGAIN|ETIMEDOUT/.test(output))
+    return `No database server answers at ${host}. Check DATABASE_URL and that the server runs, then run the command again.`;
+  if (/authentication failed|28P01|28000|no pg_hba.conf/.test(output))
+    return `The database server at ${host} does not accept the user “${username}” with this password. Check DATABASE_URL, then run the command again.`;
+  if (/database ".*" does not exist|3D000/.test(output))
+    return `There is no database “${name}” at ${host}. Create it (createdb ${name}) or name another in DATABASE_URL, then run the command again.`;
+  if (/42501|permission denied/.test(output))
+    return `The user “${username}” may not make tables in the database “${name}”. Make that user its owner, then run the command again.`;
+  return (
+    causeOf(output) ??
+    `The database could not be brought up to date (${tellingLine(output)}). Mend that, then run the command again.`
+  );
 }

@@ -4,4 +4,4 @@ import { fileURLToPath } from 'node:url';
 export const ROOT = fileURLToPath(new URL('../../', import.meta.url));
 
 /** Everything the project makes while running; ignored by git. */
-export const DATA = `${ROOT}.data/`;
+export const DATA = `${ROOT}.data`;

@@ -1,29 +1,36 @@
 import { spawn } from 'node:child_process';
 
-/**
- * Runs a program to its end and hands back `{ code, output }` (both streams together). With
- * `show: true` the output goes to the terminal as it comes, and is still handed back.
- */
-export function run(program, args, { show = false, ...options } = {}) {
+const living = new Set();
+
+/** Runs a program to its end and hands back `{ code, output }`, both streams together. */
+export function run(program, args, { input, ...options } = {}) {
   return new Promise((resolve, reject) => {
-    const child = spawn(program, args, { stdio: ['ignore', 'pipe', 'pipe'], ...options });
+    const stdin = input === undefined ? 'ignore' : 'pipe';
+    const child = spawn(program, args, { stdio: [stdin, 'pipe', 'pipe'], ...options });
+    living.add(child);
     let output = '';
-    const take = (stream) => (chunk) => {
-      output += chunk;
-      if (show) stream.write(chunk);
-    };
-    child.stdout?.on('data', take(process.stdout));
-    child.stderr?.on('data', take(process.stderr));
-    child.on('error', reject);
-    child.on('close', (code) => resolve({ code: code ?? 1, output }));
+    for (const stream of [child.stdout, child.stderr]) {
+      stream.setEncoding('utf8');
+      stream.on('data', (text) => (output += text));
+    }
+    child.on('error', (error) => {
+      living.delete(child);
+      reject(error);
+    });
+    child.on('close', (code) => {
+      living.delete(child);
+      resolve({ code: code ?? 1, output });
+    });
+    if (input !== undefined) child.stdin.end(input);
   });
 }
 
-/** Whether a program can be found and runs. */
+/** Ends what `run` has started and not yet seen the end of. */
+export function endChildren() {
+  for (const child of living) child.kill('SIGTERM');
+}
+
+/** Whether a program can be found. */
 export async function has(program) {
-  try {
-    return (await run('sh', ['-c', `command -v ${program}`])).code === 0;
-  } catch {
-    return false;
-  }
+  return (await run('sh', ['-c', `command -v ${program}`])).code === 0;
 }

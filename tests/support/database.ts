@@ -1,3 +1,5 @@
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
 import type { TestProject } from 'vitest/node';
 import { ensureDatabase, migrate } from '../../scripts/lib/database.mjs';
 import { startTestCluster } from '../../scripts/lib/test-cluster.mjs';
@@ -16,5 +18,11 @@ export default async function setup(project: TestProject) {
   const cluster = given ? { url: given, end: () => Promise.resolve() } : await startTestCluster();
   await migrate(await ensureDatabase(cluster.url, TEMPLATE));
   project.provide('clusterUrl', cluster.url);
-  return () => cluster.end();
+  const files = mkdtempSync(`${tmpdir()}/evenrun-files-`);
+  process.env.SESSION_SECRET ??= 'a secret for tests only, forty characters';
+  process.env.EVENRUN_DATA_DIR = files;
+  return async () => {
+    rmSync(files, { recursive: true, force: true });
+    await cluster.end();
+  };
 }
