@@ -4,9 +4,12 @@ import { clusterUrl, initialise } from './cluster-files.mjs';
 import { clusterPlace } from './cluster-owner.mjs';
 import { freePort, portTrouble } from './ports.mjs';
 import { postgresPrograms } from './postgres.mjs';
-import { isAlive, worksIn } from './processes.mjs';
+import { isAlive, pause, worksIn } from './processes.mjs';
 import { run } from './run.mjs';
 import { Stop } from './say.mjs';
+
+/** Somebody took the port in this very moment; or the last processes of a killed server still end. */
+const PASSING = /could not (bind|create any TCP)|pre-existing shared memory block/i;
 
 /**
  * Starts a PostgreSQL cluster of this project's own, unless it runs already, and hands back its address:
@@ -68,8 +71,10 @@ async function start(cluster, attempt = 1) {
   );
   if (code === 0) return port;
   const said = existsSync(log) ? readFileSync(log, 'utf8') : output;
-  const portLost = /could not (bind|create any TCP)/i.test(said);
-  if (portLost && attempt < 5) return start(cluster, attempt + 1);
+  if (PASSING.test(said) && attempt < 10) {
+    await pause(500);
+    return start(cluster, attempt + 1);
+  }
   throw new Stop(
     causeOf(said) ??
       `The database did not start (${tellingLine(said)}). Its whole log is ${log}; mend that, then run the command again.`,
