@@ -18,7 +18,9 @@ export function PageHead({ title, crumbs, note, actions }: PageHeadProps) {
         <h1 className="text-xl font-semibold">{title}</h1>
         {note !== undefined && <p className="text-ink-soft">{note}</p>}
       </div>
-      {actions !== undefined && <div className="no-print flex flex-wrap gap-2">{actions}</div>}
+      {actions !== undefined && (
+        <div className="no-print flex flex-wrap items-center gap-2">{actions}</div>
+      )}
     </header>
   );
 }

@@ -73,7 +73,7 @@ function Expected({ job, answer }: AnswerCardProps) {
             {index > 0 && '; '}
             {point.label}{' '}
             <span className="figures">
-              {formatQuantity(point.amplitude, job.unit)}
+              {smallOr(point.amplitude, job.unit)}
               {point.band !== null && ` ± ${formatNumber(point.band)}`}
             </span>
           </span>
@@ -83,8 +83,7 @@ function Expected({ job, answer }: AnswerCardProps) {
       <p className="text-ink-soft">
         Condition number <span className="figures">{formatNumber(answer.condition.number)}</span> (
         {CONDITION_WORDS[answer.condition.verdict]}); misfit of all runs{' '}
-        <span className="figures">{formatQuantity(answer.misfit, job.unit)}</span>; method{' '}
-        {answer.method}.
+        <span className="figures">{smallOr(answer.misfit, job.unit)}</span>; method {answer.method}.
         {parts &&
           ` Static part ${formatMass(parts.static.massG)} in each plane at ${formatDegrees(parts.static.angleDeg, 1)}, couple part ${formatMass(parts.couple.massG)} at ${formatDegrees(parts.couple.angleDeg, 1)} in the first plane and opposite in the second.`}
       </p>
@@ -111,6 +110,11 @@ const CONDITION_WORDS = {
   caution: 'with care: small errors of reading move the weights a lot',
   withhold: 'too high: the planes cannot be told apart',
 } as const;
+
+/** Nobody reads less than a hundredth: below it the number is only rounding. */
+function smallOr(amplitude: number, unit: string): string {
+  return amplitude < 0.01 ? `below ${formatQuantity(0.01, unit)}` : formatQuantity(amplitude, unit);
+}
 
 function uncertainty(grams: number | null, degrees: number | null): string {
   if (grams === null || degrees === null) return 'not known: one base run';

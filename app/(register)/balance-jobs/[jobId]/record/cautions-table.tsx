@@ -12,18 +12,18 @@ export function CautionsTable({ cautions, timeZone }: CautionsTableProps) {
       <Table caption="Cautions confirmed">
         <thead>
           <tr>
-            <Th>caution</Th>
             <Th>step</Th>
+            <Th>cautions</Th>
             <Th>named at the machine</Th>
             <Th>ticked by</Th>
             <Th>time</Th>
           </tr>
         </thead>
         <tbody>
-          {cautions.map((line, index) => (
-            <tr key={index}>
-              <RowHead>{line.cautionId}</RowHead>
-              <Td>{line.step}</Td>
+          {byStep(cautions).map((line) => (
+            <tr key={`${line.step} ${line.at}`}>
+              <RowHead>{line.step}</RowHead>
+              <Td>{line.cautionIds.join(', ')}</Td>
               <Td>{line.namedPerson ?? 'not asked'}</Td>
               <Td>{line.person}</Td>
               <Td>{formatDateTime(line.at, timeZone)}</Td>
@@ -33,4 +33,17 @@ export function CautionsTable({ cautions, timeZone }: CautionsTableProps) {
       </Table>
     </Panel>
   );
+}
+
+type StepLine = Omit<CautionLine, 'cautionId'> & { cautionIds: string[] };
+
+/** Cautions ticked together stand in one line. */
+function byStep(cautions: readonly CautionLine[]): StepLine[] {
+  const lines: StepLine[] = [];
+  for (const { cautionId, ...rest } of cautions) {
+    const last = lines.at(-1);
+    if (last?.step === rest.step && last.at === rest.at) last.cautionIds.push(cautionId);
+    else lines.push({ ...rest, cautionIds: [cautionId] });
+  }
+  return lines;
 }

@@ -1,7 +1,6 @@
 'use client';
 
-import { useRouter } from 'next/navigation';
-import { useActionState, useEffect } from 'react';
+import { useActionState } from 'react';
 import { Caution } from '@/components/ui/caution';
 import { CheckField } from '@/components/ui/check-field';
 import { ErrorSummary } from '@/components/ui/error-summary';
@@ -11,7 +10,6 @@ import { RadioField } from '@/components/ui/radio-field';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextAreaField } from '@/components/ui/text-area-field';
 import { CAUTIONS, STANDING_SENTENCE } from '@/lib/domain/cautions';
-import { routes } from '@/lib/routes';
 import { IDLE, type ActionState } from '@/lib/schemas/action-state';
 import type { NewJobDto } from '@/lib/schemas/balance-job';
 import { openBalanceJobAction } from './actions';
@@ -20,14 +18,10 @@ import { SetupFacts } from './setup-facts';
 
 /** Everything that must be settled before the first run. */
 export function OpenJobForm({ dto }: { dto: NewJobDto }) {
-  const router = useRouter();
   const [state, submit] = useActionState<ActionState<{ jobId: number }>, FormData>(
     openBalanceJobAction,
     IDLE,
   );
-  useEffect(() => {
-    if (state.status === 'ok') router.push(routes.balanceJob(state.value.jobId));
-  }, [state, router]);
   return (
     <form action={submit} className="flex max-w-3xl flex-col gap-5" noValidate>
       <ErrorSummary state={state} />
