@@ -1,13 +1,11 @@
-import { subtract, ZERO } from '../complex';
 import { fail, ok, type Result } from '../result';
-import { normaliseDeg } from '../units';
-import { buildAnswer } from './build-answer';
+import { buildAnswer, type PlaneAnswer } from './build-answer';
 import { rootMeanSquare } from './influence-fit';
 import type { FittedWeight, JobInput, JobRun } from './job-input';
 import { missOf, predictRun } from './predict-run';
 import { slipHypotheses, type SlipHypothesis, type SlipInput } from './slip-hypotheses';
 import { solveJob } from './solve-job';
-import { polarUnbalance, unbalanceByPlane, type PolarUnbalance } from './weights-ledger';
+import type { PolarUnbalance } from './weights-ledger';
 
 /** How well one slip explains a check run. */
 export type SlipTest = {
@@ -17,7 +15,7 @@ export type SlipTest = {
   readonly miss: number;
   /** Within the band at every point; null where no band is known. */
   readonly inside: boolean | null;
-  /** Were it so: what should hang there in total, and what to add to what hangs there. */
+  /** Were it so: the total from the runs before, and what to add after what the check run shows. */
   readonly total: readonly (PolarUnbalance & { readonly planeId: number })[];
   readonly add: readonly (PolarUnbalance & { readonly planeId: number })[];
 };
@@ -62,17 +60,12 @@ function testOf(
   const basis = solution.value;
   const misses = missOf(predictRun(basis, job, [...others, ...fitted]), check.vectors);
   const kind = job.points.length === job.planes.length ? 'exact' : 'least squares';
-  const answer = buildAnswer({ input: job, basis, meanRpm: basis.speed.meanRpm }, kind);
+  const task = { input: job, basis, meanRpm: basis.speed.meanRpm };
+  const answer = buildAnswer(task, kind);
   if (!answer.ok) return answer;
-  const ids = job.planes.map(({ id }) => id);
-  const hanging = unbalanceByPlane(fitted, ids);
-  const wanted = answer.value.add.map(({ massG, radiusMm, angleDeg, planeId }) => ({
-    massG,
-    radiusMm,
-    angleDeg,
-    planeId,
-  }));
-  const more = unbalanceByPlane(wanted, ids).map((u, i) => subtract(u, hanging[i] ?? ZERO));
+  const hanging = { weightsNow: [...others, ...fitted], now: check.vectors, nowRuns: 1 };
+  const more = buildAnswer({ ...task, basis: { ...basis, ...hanging } }, kind);
+  if (!more.ok) return more;
   return ok({
     slip,
     words,
@@ -80,11 +73,15 @@ function testOf(
     inside: misses.some(({ inside }) => inside === null)
       ? null
       : misses.every(({ inside }) => inside),
-    total: answer.value.total.map(({ planeId, unbalanceGmm, angleDeg }) => ({
-      planeId,
-      unbalanceGmm,
-      angleDeg: normaliseDeg(angleDeg),
-    })),
-    add: ids.map((planeId, i) => ({ planeId, ...polarUnbalance(more[i] ?? ZERO) })),
+    total: answer.value.total.map(unbalanceOnly),
+    add: more.value.add.map(unbalanceOnly),
   });
+}
+
+function unbalanceOnly({
+  planeId,
+  unbalanceGmm,
+  angleDeg,
+}: PlaneAnswer): PolarUnbalance & { readonly planeId: number } {
+  return { planeId, unbalanceGmm, angleDeg };
 }
