@@ -8,6 +8,9 @@ const LOCK = 20_260_101;
 try {
   const said = await seedIfEmpty();
   if (said !== null) console.log(said);
+} catch (error) {
+  console.error(`error: ${oneLine(error)}`);
+  process.exitCode = 1;
 } finally {
   await closeDatabase();
 }
@@ -26,4 +29,10 @@ async function seedIfEmpty(): Promise<string | null> {
   if (!seeded) return null;
   const seconds = ((performance.now() - started) / 1000).toFixed(1);
   return `Seeded the demo plant: ${counts.machines} machines, ${counts.readings} readings, ${counts.jobs} balance jobs in ${seconds} s`;
+}
+
+/** A refused statement is thousands of characters of values before it says why. */
+function oneLine(error: unknown): string {
+  const message = error instanceof Error ? error.message : String(error);
+  return (message.split(' - ').at(-1)?.split('\n')[0] ?? message).slice(0, 300);
 }
