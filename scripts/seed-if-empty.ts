@@ -34,5 +34,6 @@ async function seedIfEmpty(): Promise<string | null> {
 /** A refused statement is thousands of characters of values before it says why. */
 function oneLine(error: unknown): string {
   const message = error instanceof Error ? error.message : String(error);
-  return (message.split(' - ').at(-1)?.split('\n')[0] ?? message).slice(0, 300);
+  const [withoutDetail = message] = message.split('\n - detail');
+  return (withoutDetail.split(' - ').at(-1)?.split('\n')[0] ?? message).slice(0, 300);
 }

@@ -1,8 +1,9 @@
 import { execFile } from 'node:child_process';
-import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { compare } from 'bcryptjs';
+import { Client } from 'pg';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Answer, Coefficient } from '@/entities/answer';
@@ -39,12 +40,12 @@ let failed: Ran;
 
 beforeAll(async () => {
   folder = await mkdtemp(join(tmpdir(), 'evenrun-demo-'));
-  await writeFile(join(folder, 'no-folder'), '');
   [plant, broken] = [await freshDatabase(), await freshDatabase()];
-  // The second has nowhere to put uploaded files, which come last: it fails after nearly everything.
+  // The second refuses records with samples: it fails when people, machines and jobs are written.
+  await ask(broken.url, `alter table waveform add constraint no_samples check (sample_count < 3)`);
   [first, failed] = await Promise.all([
     seed(plant.url, join(folder, 'files')),
-    seed(broken.url, join(folder, 'no-folder', 'files')),
+    seed(broken.url, join(folder, 'broken')),
   ]);
   process.env.DATABASE_URL = plant.url;
   process.env.EVENRUN_DATA_DIR = join(folder, 'files');
@@ -70,13 +71,16 @@ function seed(url: string, files: string): Promise<Ran> {
   });
 }
 
-async function countOf(url: string, table: string): Promise<number> {
-  const { Client } = await import('pg');
+async function countOf(url: string, table: string): Promise<unknown> {
+  const [row] = await ask(url, `select count(*)::int as n from ${table}`);
+  return row?.n;
+}
+
+async function ask(url: string, sql: string): Promise<Record<string, unknown>[]> {
   const client = new Client({ connectionString: url });
   await client.connect();
   try {
-    const { rows } = await client.query<{ n: number }>(`select count(*)::int as n from ${table}`);
-    return rows[0]?.n ?? 0;
+    return (await client.query<Record<string, unknown>>(sql)).rows;
   } finally {
     await client.end();
   }
@@ -101,7 +105,7 @@ describe('the seeding', () => {
 
   it('leaves the database empty when it fails half-way, and says why in a line', async () => {
     expect(failed.code).toBe(1);
-    expect(failed.output).toMatch(/^error: ENOTDIR.*\n$/);
+    expect(failed.output).toMatch(/^error: new row .* violates check constraint "no_samples"\n$/);
     for (const table of ['person', 'site', 'machine', 'reading', 'weight', 'audit_event'])
       expect(await countOf(broken.url, table), table).toBe(0);
   });
