@@ -35,7 +35,7 @@ export type InfluenceFit = {
  * @returns as-found vectors, coefficients per g·mm, misfit; or, where the rank is below planes + 1,
  *   a failure that says in words what is missing
  * Source: linear influence coefficients, textbooks (e.g. S. S. Rao, Mechanical Vibrations, ch. 9).
- * @example base 3.87 at 219°, with 15 g at 400 mm, 0°: 2.46 at 251° → H = 0.369 mm/s per kg·mm at 2.9°
+ * @example base 3.873 at 219°, with 15 g at 400 mm, 0°: 2.46 at 251° → H = 0.369 mm/s per kg·mm at 2.9°
  */
 export function fitInfluence(
   runs: readonly FitRun[],

@@ -19,7 +19,7 @@ const MIN_MAX_ROUNDS = 400;
  * @returns unbalance per plane, or a failure where there are fewer points than planes or a plane
  *   has no effect at any point
  * Source: least squares on influence coefficients, textbooks.
- * @example V_now 3.87 at 219°, H 0.369 mm/s per kg·mm at 2.9° → 10 506 g·mm at 36.1°
+ * @example V_now 3.873 at 219°, H 0.3688 mm/s per kg·mm at 2.9° → 10 502 g·mm at 36.1°
  */
 export function solveCorrection(task: CorrectionTask): Result<Complex[]> {
   const planes = task.coefficients[0]?.length ?? 0;
