@@ -46,8 +46,6 @@ function wantedStages() {
 async function tool(name, { env }) {
   const begun = Date.now();
   const result = await runTool(name, env);
-  if (result === null)
-    return say(`${name.padEnd(14)} left out: this tool has no settings here yet`);
   total[result.passed ? 'passed' : 'failed'] += 1;
   report(name, result.passed ? 'passed' : 'FAILED', begun);
   if (!result.passed) say(result.output);
@@ -56,7 +54,6 @@ async function tool(name, { env }) {
 async function suite(name, { env, scratch }) {
   const begun = Date.now();
   const result = await runSuite(name, env, scratch);
-  if (result === null) return say(`${name.padEnd(14)} left out: it has no test yet`);
   for (const key of Object.keys(total)) total[key] += result.counts[key];
   const { passed, failed, skipped: omitted } = result.counts;
   report(name, `${passed} passed, ${failed} failed, ${omitted} skipped`, begun);

@@ -27,16 +27,27 @@ export async function buildIfStale(folder, environment) {
   say('Building the product; this takes a minute or two …');
   // A build cut short must not pass for the one before it.
   rmSync(stamp, { force: true });
-  const { code, output } = await run(
-    process.execPath,
-    ['node_modules/next/dist/bin/next', 'build'],
-    {
-      cwd: ROOT,
-      env: { ...process.env, ...environment, NODE_ENV: 'production', EVENRUN_DIST: folder },
-    },
-  );
+  const { code, output } = await keepingTypeSettings(() => nextBuild(folder, environment));
   if (code !== 0) throw new Stop(buildSentence(output));
   writeFileSync(stamp, wanted);
+}
+
+function nextBuild(folder, environment) {
+  return run(process.execPath, ['node_modules/next/dist/bin/next', 'build'], {
+    cwd: ROOT,
+    env: { ...process.env, ...environment, NODE_ENV: 'production', EVENRUN_DIST: folder },
+  });
+}
+
+/** Next.js writes the folder it builds into to tsconfig.json: a change nobody made, and a new build each time. */
+async function keepingTypeSettings(action) {
+  const file = `${ROOT}tsconfig.json`;
+  const before = readFileSync(file, 'utf8');
+  try {
+    return await action();
+  } finally {
+    if (readFileSync(file, 'utf8') !== before) writeFileSync(file, before);
+  }
 }
 
 function buildSentence(output) {
