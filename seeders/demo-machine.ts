@@ -12,6 +12,8 @@ import { modelOf, type MachineSpec } from './machine-spec';
 /** A machine of the register together with the model that shakes it. */
 export type DemoMachine = {
   readonly spec: MachineSpec;
+  /** Counted through the plant: what its random numbers start from, whatever the ids are. */
+  readonly number: number;
   readonly model: ModelledMachine;
   readonly siteId: number;
   readonly machineId: number;
@@ -33,6 +35,7 @@ type Place = {
   readonly limitSet: LimitSet;
   readonly by: Actor;
   readonly startedAt: Date;
+  readonly number: number;
   readonly roundHour: number;
 };
 
@@ -42,7 +45,7 @@ export async function seedMachine(
   spec: MachineSpec,
   place: Place,
 ): Promise<DemoMachine> {
-  const { site, limitSet, by, startedAt, roundHour } = place;
+  const { site, limitSet, by, startedAt, number, roundHour } = place;
   const model = modelOf(spec);
   const machine = createMachine(em, spec, place);
   const rotor = createRotor(em, spec, site);
@@ -55,6 +58,7 @@ export async function seedMachine(
   await em.flush();
   return {
     spec,
+    number,
     model,
     siteId: site.id,
     machineId: machine.id,
@@ -132,7 +136,7 @@ function createPoints(
         machine,
         label,
         order: i + 1,
-        place: 'driven',
+        place: spec.kind.includes('motor') ? 'driver' : 'driven',
         fromAM: i * spec.spanM,
         staticLoadN: Math.round((spec.massKg * 9.81) / 2),
         ...spec.ball,

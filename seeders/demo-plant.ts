@@ -58,7 +58,8 @@ export async function seedPlant(em: EntityManager, calendar: DemoCalendar): Prom
       if (!area) throw new Error(`${spec.tag} has no area`);
       const limitSet = limitSetFor(spec, limitSets);
       const by = actorOf(actors, technician);
-      const made = { site, area, limitSet, by, startedAt, roundHour: 8 + 0.4 * place };
+      const number = machines.size + 1;
+      const made = { site, area, limitSet, by, startedAt, number, roundHour: 8 + 0.4 * place };
       machines.set(spec.tag, await seedMachine(em, spec, made));
     }
     noteSeeding(em, { site, at: startedAt, count: specs.length });
@@ -104,7 +105,7 @@ function noteSeeding(em: EntityManager, note: { site: Site; at: Date; count: num
   em.create(Instrument, {
     site,
     name: 'Two-channel field instrument',
-    serial: `FI-${site.id}07`,
+    serial: `FI-${site.name.length}07`,
     phaseSense: 'lag',
   });
   em.create(AuditEvent, {

@@ -25,7 +25,7 @@ export function readingsOf(
   rounds: readonly Round[],
   ledger: DemoLedger,
 ): TypedReading[] {
-  const random = randomSource(104_729 * machine.machineId);
+  const random = randomSource(104_729 * machine.number);
   return rounds.flatMap((round) => {
     const { day, speedRpm, at } = round;
     const shaken = vibrationAt(machine.model, { day, speedRpm }, weightsOn(ledger, at));

@@ -10,7 +10,7 @@ const JITTER_DAYS = 5;
 
 /** The rounds of a machine: every two to three weeks, in the morning, at nearly the same speed. */
 export function roundsOf(machine: DemoMachine, calendar: DemoCalendar): Round[] {
-  const random = randomSource(7919 * machine.machineId);
+  const random = randomSource(7919 * machine.number);
   const rounds: Round[] = [];
   const first = 2 + Math.floor(6 * random());
   const last = machine.spec.lastDay ?? DEMO_DAYS - 2;

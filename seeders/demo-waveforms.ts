@@ -49,7 +49,7 @@ export function sample(
   const vibration = vibrationAt(machine.model, { day, speedRpm }, weights)[pointIndex];
   if (!vibration) throw new Error(`${machine.spec.tag} has no such point`);
   const length = vibration.knocks === null ? ORDINARY : KNOCKING;
-  const random = placeThenDay(6151 * machine.machineId + 89 * pointIndex, Math.round(10 * day));
+  const random = placeThenDay(6151 * machine.number + 89 * pointIndex, Math.round(10 * day));
   const firstMarkS = (random() * 60) / speedRpm;
   const plan = { vibration, speedRpm, ...length, firstMarkS, noiseRmsMS2: 0.05 };
   const { samplesMS2, tacho } = synthesizeWaveform(plan, random);
