@@ -3,6 +3,7 @@ import { routes } from '@/lib/routes';
 import type { PreviewDto } from '@/lib/schemas/in-tray';
 import type { SpectrumDataDto, SpectrumKind, WaveformDataDto } from '@/lib/schemas/reading-page';
 import type { LayoutChoicesInput } from '@/lib/schemas/upload-input';
+import { fetchJson } from './fetch-json';
 
 type Stretch = { from: number; to: number } | null;
 
@@ -38,21 +39,6 @@ export function previewQuery(uploadId: number, choices: LayoutChoicesInput) {
       ),
     staleTime: Infinity,
   });
-}
-
-async function fetchJson<Value>(address: string, signal: AbortSignal): Promise<Value> {
-  const response = await fetch(address, { signal });
-  if (!response.ok) throw new Error(await sentenceOf(response));
-  // The handler and this module share the DTO type; nothing else answers at this address.
-  return (await response.json()) as Value;
-}
-
-async function sentenceOf(response: Response): Promise<string> {
-  if (response.status === 401) return 'You are signed out. Sign in again, then come back.';
-  if (response.status === 404) return 'It is not there any more. Go back to the list.';
-  const body: unknown = await response.json().catch(() => null);
-  const detail = body !== null && typeof body === 'object' && 'detail' in body ? body.detail : null;
-  return typeof detail === 'string' ? detail : 'The server did not answer. Try again.';
 }
 
 function search(given: Record<string, string>, stretch: Stretch): string {
