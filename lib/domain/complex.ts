@@ -22,7 +22,8 @@ export function size(z: Complex): number {
 export function angleDeg(z: Complex): number {
   const deg = (Math.atan2(z.im, z.re) * 180) / Math.PI;
   const turned = deg < 0 ? deg + 360 : deg;
-  return turned >= 360 ? 0 : turned;
+  // + 0 makes −0 of an exactly real vector 0, which JSON would do anyway.
+  return turned >= 360 ? 0 : turned + 0;
 }
 
 /** Sum. */

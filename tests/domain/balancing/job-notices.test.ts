@@ -66,8 +66,8 @@ describe('notices beside an answer', () => {
     const alike: ModelRotor = {
       asFound: [fromPolar(4, 0), fromPolar(4, 180), fromPolar(0.3, 0)],
       coefficients: [
-        [fromPolar(3e-4, 0), fromPolar(2e-4, 0)],
-        [fromPolar(2e-4, 0), fromPolar(3e-4, 0)],
+        [fromPolar(3e-4, 0), fromPolar(2.2e-4, 0)],
+        [fromPolar(2.2e-4, 0), fromPolar(3e-4, 0)],
         [fromPolar(1e-4, 0), fromPolar(1e-4, 90)],
       ],
       radiiMm: [300, 300],
