@@ -135,7 +135,7 @@ export const newSetupInput = z.object({
   reason: text('why there is a new set-up', 400),
 });
 
-export const useLimitSetInput = z.object({
+export const chooseLimitSetInput = z.object({
   machineId: id,
   limitSetId: id,
   reason: text('why this limit set fits', 400),

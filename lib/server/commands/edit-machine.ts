@@ -9,7 +9,7 @@ import {
   recordEventInput,
   restoreMachineInput,
   retireMachineInput,
-  useLimitSetInput,
+  chooseLimitSetInput,
 } from '@/lib/schemas/register-input';
 import { command } from '../command';
 import { areaNamed } from '../register/area-named';
@@ -168,8 +168,8 @@ export const newSetup = command(
 );
 
 /** Judges a machine by another limit set from now on; earlier judgements keep theirs by value. */
-export const useLimitSet = command(
-  { name: 'useLimitSet', permission: 'register:edit', input: useLimitSetInput },
+export const chooseLimitSet = command(
+  { name: 'chooseLimitSet', permission: 'register:edit', input: chooseLimitSetInput },
   async (context, { machineId, limitSetId, reason }) => {
     const { em, siteIds, actor, now, audit } = context;
     const machine = await visibleMachine(context, machineId);
