@@ -37,14 +37,14 @@ export const pointTrend = query(
         ...events.map((event) => ({
           id: `event-${event.id}`,
           at: event.at.toISOString(),
-          label: event.text,
+          label: shortened(event.text),
           jobId: event.balanceJobId ?? null,
           breaksTrend: event.breaksTrend,
         })),
         ...setups.map((setup) => ({
           id: `setup-${setup.id}`,
           at: setup.validFrom.toISOString(),
-          label: `set-up ${setup.number}: ${setup.reason}`,
+          label: shortened(`set-up ${setup.number}: ${setup.reason}`),
           jobId: null,
           breaksTrend: true,
         })),
@@ -52,6 +52,13 @@ export const pointTrend = query(
     };
   },
 );
+
+const LABEL_LENGTH = 40;
+
+/** What fits beside a tick on the time axis; the machine page has the whole text. */
+function shortened(text: string): string {
+  return text.length <= LABEL_LENGTH ? text : `${text.slice(0, LABEL_LENGTH - 1).trimEnd()}…`;
+}
 
 function limitLines(reading: Reading | undefined): PointTrendDto['limits'] {
   const limits = reading?.limits;

@@ -39,7 +39,11 @@ export function coefficientLines(estimates: readonly Estimate[]): CoefficientLin
     const key = [plane.id, point.id, setup.id, unit].join(' ');
     groups.set(key, [...(groups.get(key) ?? []), estimate]);
   }
-  return [...groups.values()].flatMap(lineOf);
+  return [...groups.values()].flatMap(lineOf).sort((a, b) => nameOf(a).localeCompare(nameOf(b)));
+}
+
+function nameOf({ planeName, pointLabel }: CoefficientLine): string {
+  return `${planeName} ${pointLabel}`;
 }
 
 function lineOf(group: readonly Estimate[]): CoefficientLine[] {
