@@ -4,7 +4,7 @@ import { checkNode } from './lib/check-node.mjs';
 import { startCluster } from './lib/cluster.mjs';
 import { ensureDatabase, migrate, seedIfEmpty } from './lib/database.mjs';
 import { ensureNpmPackages } from './lib/npm-packages.mjs';
-import { ownSettings, webPort } from './lib/own-settings.mjs';
+import { chosenDatabase, ownSettings, webPort } from './lib/own-settings.mjs';
 import { DATA, ROOT } from './lib/places.mjs';
 import { ensurePostgres } from './lib/postgres.mjs';
 import { endChildren } from './lib/run.mjs';
@@ -36,7 +36,7 @@ await runMain(async () => {
 
 /** The database named by DATABASE_URL, or that of a cluster of our own. */
 async function databaseAddress() {
-  const given = process.env.DATABASE_URL;
+  const given = chosenDatabase();
   if (!given) await ensurePostgres();
   await ensureNpmPackages();
   return given || ensureDatabase(await startCluster(DATA), 'evenrun');
