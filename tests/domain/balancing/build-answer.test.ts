@@ -144,6 +144,14 @@ describe('the state now', () => {
     expect(solution.notices.map(({ code }) => code)).toContain('now-from-model');
   });
 
+  it('is what the newest runs with these weights showed', () => {
+    const again = run(3, 'check', [{ amp: 3.5, deg: 210 }]);
+    const input = onePlane();
+    const solution = solve({ ...input, runs: [...input.runs, again] });
+    expect(solution).toMatchObject({ nowFrom: 'measured', nowRunIds: [3], nowRuns: 1 });
+    near(solution.now[0]!.amplitude, 3.5, 1e-12);
+  });
+
   it('is that of the last run where nothing is said of weights', () => {
     const { weightsNow: _, ...silent } = onePlane();
     const solution = solve(silent);
@@ -203,13 +211,16 @@ describe('tolerance', () => {
 
   it('moves residuals to the bearings where the geometry is known', () => {
     const bearings = { ...fan, tolerancePlanesApartM: 2, massCentreFromAM: 1 };
-    const input = onePlane({ rotor: bearings });
+    const input = onePlane({ rotor: bearings, scatter: 0.05 });
     const [plane] = input.planes;
     const placed = { ...input, planes: [{ ...plane!, fromAM: 0.5 }] };
     const { lines, statedAt, correctionPlanes } = solve(placed).tolerance!;
     expect(statedAt).toBe('tolerance planes');
     near(lines[0]!.unbalanceGmm, 0.75 * correctionPlanes[0]!.unbalanceGmm, 1e-6);
     near(lines[1]!.unbalanceGmm, 0.25 * correctionPlanes[0]!.unbalanceGmm, 1e-6);
+    const spread = correctionPlanes[0]!.uncertaintyGmm!;
+    near(lines[0]!.uncertaintyGmm!, 0.75 * spread, 1e-9);
+    near(lines[1]!.uncertaintyGmm!, 0.25 * spread, 1e-9);
     expect(lines.map(({ name }) => name)).toEqual(['A', 'B']);
     expect(solve(input).tolerance!.statedAt).toBe('correction planes');
   });

@@ -62,6 +62,14 @@ describe('notices beside an answer', () => {
     expect(wordsOf(input, 'misfit')).toContain('mm/s rms');
   });
 
+  it('do not blame the fitting of a trial that the answer does not use', () => {
+    const second = run(4, 'trial', [{ amp: 2, deg: 200 }], [weight(1, 20, 300, 90)]);
+    const chosen = { kind: 'chosen runs', runIds: [1, 2, 3] } as const;
+    const input = jobWith([...quiet, second], { coefficientsFrom: chosen });
+    expect(codes(input)).not.toContain('estimate-differs');
+    expect(valueOf(solveJob(input)).estimates[1]!.differencePct).toBeGreaterThan(50);
+  });
+
   it('say that planes act alike, that weights fight, that a point would rise', () => {
     const alike: ModelRotor = {
       asFound: [fromPolar(4, 0), fromPolar(4, 180), fromPolar(0.3, 0)],

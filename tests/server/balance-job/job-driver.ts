@@ -55,6 +55,11 @@ export class JobDriver {
     return new JobDriver(actor, machine, valueOf(opened).jobId, speedRpm);
   }
 
+  /** The same job in another person's hands. */
+  as(actor: Actor): JobDriver {
+    return new JobDriver(actor, this.machine, this.jobId, this.speedRpm);
+  }
+
   async run(purpose: 'base' | 'trial' | 'check', readings: Polar[], speedRpm = this.speedRpm) {
     return recordRun(this.actor, {
       jobId: this.jobId,

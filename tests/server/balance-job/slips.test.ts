@@ -51,9 +51,12 @@ async function openJob(
   });
 }
 
-async function withBase(over = {}): Promise<JobDriver> {
+async function withBase(over: Parameters<typeof openJob>[0] = {}): Promise<JobDriver> {
   const job = await openJob(over);
-  const readings = [{ amp: 3.9, deg: 100 }, ...(over ? [{ amp: 3.2, deg: 200 }] : [])];
+  const readings = [
+    { amp: 3.9, deg: 100 },
+    { amp: 3.2, deg: 200 },
+  ];
   valueOf(await job.run('base', readings.slice(0, (await job.sheet()).points.length)));
   await job.acceptBase('One base run.');
   return job;
@@ -107,10 +110,7 @@ describe('what cannot be recorded', () => {
 
   it('anything by a reader', async () => {
     const job = await openJob();
-    const reader = Object.assign(Object.create(JobDriver.prototype) as JobDriver, {
-      ...job,
-      actor: plant.at('reader'),
-    });
+    const reader = job.as(plant.at('reader'));
     expect(await reader.run('base', [{ amp: 1, deg: 1 }])).toMatchObject({
       failure: { code: 'forbidden' },
     });

@@ -90,12 +90,12 @@ describe('a machine entered', () => {
     });
   });
 
-  it('refuses positions that cannot be told apart, and writes nothing then', async () => {
-    const planes = [
-      { name: 'W', radiusMm: '300', positions: '360', firstDeg: '0', numbering: 'with' as const },
-    ];
-    const close = { ...planes[0], positions: '361' };
-    expect(await create({ tag: 'PO-1', planes: [close] })).toMatchObject({ ok: false });
+  it('refuses more positions than a rim can tell apart, and writes nothing then', async () => {
+    const [plane] = newMachine(plant).planes ?? [];
+    if (!plane) throw new Error('the usual machine has a plane');
+    expect(await create({ tag: 'PO-1', planes: [{ ...plane, positions: '361' }] })).toMatchObject({
+      failure: { field: 'planes.0.positions' },
+    });
     expect((await findMachines(engineer(), 'PO-1')).machines).toEqual([]);
   });
 
