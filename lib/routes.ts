@@ -15,7 +15,7 @@ export const routes = {
   newBalanceJob: (machineId: number) => `/machines/${machineId}/new-balance-job`,
   balanceJob: (jobId: number) => `/balance-jobs/${jobId}`,
   jobRecord: (jobId: number) => `/balance-jobs/${jobId}/record`,
-  dueBoard: () => '/due-board',
+  dueBoard: (query = '') => `/due-board${query}`,
   workbench: () => '/workbench',
   settings: () => '/settings',
   people: () => '/settings/people',
