@@ -7,7 +7,6 @@ type DuePlace = {
   siteName: string;
   areaName: string;
   timeZone: string;
-  decimalMark: '.' | ',';
 };
 
 /** A card of the Due board: the reckoning of `dueCard` with what identifies the machine. */

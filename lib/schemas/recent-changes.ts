@@ -7,7 +7,6 @@ export type ZoneChange = {
   name: string;
   siteName: string;
   timeZone: string;
-  decimalMark: '.' | ',';
   pointLabel: string;
   recordId: number;
   at: string;

@@ -4,16 +4,18 @@ import { Fact, Facts } from '@/components/ui/fact';
 import { LinkButton } from '@/components/ui/link-button';
 import { Value } from '@/components/ui/value';
 import { ZoneStamp } from '@/components/ui/zone-stamp';
-import { formatAge, formatNumber } from '@/lib/format';
+import { tellingReasons } from '@/lib/domain/due/telling-reasons';
+import { formatAge, formatNumber, type DecimalMark } from '@/lib/format';
 import { routes } from '@/lib/routes';
 import type { DueBoardCard } from '@/lib/schemas/due-board';
+import type { BoardView } from './board-view';
 import { nextBoundaryWords } from './next-boundary';
 import { Working } from './working';
 
-type DueCardItemProps = { card: DueBoardCard; asOf: string; mayOpenJob: boolean };
+type DueCardItemProps = { card: DueBoardCard; view: BoardView };
 
 /** A machine on the board: how it stands, why it is in this lane, and the working behind it. */
-export function DueCardItem({ card, asOf, mayOpenJob }: DueCardItemProps) {
+export function DueCardItem({ card, view }: DueCardItemProps) {
   const isForBalancing = card.lane === 'rebalance' || card.lane === 'act now';
   return (
     <li className="flex flex-col gap-3 py-4 first:pt-0 last:pb-0">
@@ -30,17 +32,17 @@ export function DueCardItem({ card, asOf, mayOpenJob }: DueCardItemProps) {
         </span>
         {card.mark === 'old reading' && <Badge>take a reading first</Badge>}
         {card.asksWhy && <Badge>balanced often: ask why</Badge>}
-        <Rank card={card} isForBalancing={isForBalancing} />
+        <Rank card={card} isForBalancing={isForBalancing} decimalMark={view.decimalMark} />
       </header>
-      <CardFacts card={card} asOf={asOf} />
+      <CardFacts card={card} view={view} />
       <ul className="list-disc pl-5 text-ink-soft">
-        {card.reasons.slice(0, 3).map((reason) => (
+        {tellingReasons(card).map((reason) => (
           <li key={reason}>{reason}</li>
         ))}
       </ul>
       <div className="flex flex-wrap items-start gap-x-4 gap-y-2">
-        <Working card={card} />
-        {mayOpenJob && isForBalancing && (
+        <Working card={card} decimalMark={view.decimalMark} />
+        {view.mayOpenJob && isForBalancing && (
           <span className="no-print ml-auto">
             <LinkButton href={routes.newBalanceJob(card.machineId)}>Open a balance job</LinkButton>
           </span>
@@ -50,20 +52,23 @@ export function DueCardItem({ card, asOf, mayOpenJob }: DueCardItemProps) {
   );
 }
 
-function Rank({ card, isForBalancing }: { card: DueBoardCard; isForBalancing: boolean }) {
+type RankProps = { card: DueBoardCard; isForBalancing: boolean; decimalMark: DecimalMark };
+
+function Rank({ card, isForBalancing, decimalMark }: RankProps) {
   const value = isForBalancing ? card.score : 100 * card.urgency;
   return (
     <span className="ml-auto whitespace-nowrap text-ink-soft">
       {isForBalancing ? 'score' : 'urgency'}{' '}
       <span className="figures text-lg text-ink">
-        {formatNumber(value, { decimals: 1, decimalMark: card.decimalMark })}
+        {formatNumber(value, { decimals: 1, decimalMark })}
       </span>
     </span>
   );
 }
 
-function CardFacts({ card, asOf }: { card: DueBoardCard; asOf: string }) {
-  const { decimalMark, standing, gain } = card;
+function CardFacts({ card, view }: DueCardItemProps) {
+  const { standing, gain } = card;
+  const { asOf, decimalMark } = view;
   const options = { decimals: 2, decimalMark };
   return (
     <Facts>

@@ -3,14 +3,14 @@ import { Panel } from '@/components/ui/panel';
 import type { Lane } from '@/lib/domain/due/lane';
 import { formatPlural } from '@/lib/format';
 import type { DueBoardCard } from '@/lib/schemas/due-board';
+import type { BoardView } from './board-view';
 import { DueCardItem } from './due-card-item';
 import { WatchTable } from './watch-table';
 
 type LanePanelProps = {
   lane: Lane;
   cards: readonly DueBoardCard[];
-  asOf: string;
-  mayOpenJob: boolean;
+  view: BoardView;
   /** Says that the lane is empty instead of leaving it out. */
   showEmpty: boolean;
 };
@@ -24,7 +24,7 @@ const MEANS: Readonly<Record<Lane, string>> = {
 };
 
 /** One lane with its machines in order. */
-export function LanePanel({ lane, cards, asOf, mayOpenJob, showEmpty }: LanePanelProps) {
+export function LanePanel({ lane, cards, view, showEmpty }: LanePanelProps) {
   if (cards.length === 0 && !showEmpty) return null;
   const note = `${formatPlural(cards.length, 'machine')}, ${MEANS[lane]}`;
   return (
@@ -32,12 +32,12 @@ export function LanePanel({ lane, cards, asOf, mayOpenJob, showEmpty }: LanePane
       {cards.length === 0 && <p className="text-ink-soft">No machine is in this lane.</p>}
       {lane === 'watch' && cards.length > 0 ? (
         <RowKeys>
-          <WatchTable cards={cards} asOf={asOf} />
+          <WatchTable cards={cards} view={view} />
         </RowKeys>
       ) : (
         <ol className="flex flex-col divide-y divide-rule">
           {cards.map((card) => (
-            <DueCardItem key={card.machineId} card={card} asOf={asOf} mayOpenJob={mayOpenJob} />
+            <DueCardItem key={card.machineId} card={card} view={view} />
           ))}
         </ol>
       )}

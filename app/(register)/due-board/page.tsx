@@ -13,6 +13,7 @@ import type { UnrankedMachine } from '@/lib/schemas/due-board';
 import { requireActor } from '@/lib/server/actor';
 import { narrowed } from '@/lib/server/chosen-site';
 import { dueBoard } from '@/lib/server/queries/due-board';
+import type { BoardView } from './board-view';
 import { laneFrom, laneQuery } from './lane-search';
 import { LanePanel } from './lane-panel';
 
@@ -25,6 +26,11 @@ export default async function DueBoardPage({ searchParams }: Props) {
   const chosen = laneFrom((await searchParams).lane);
   const { cards, unranked, asOf } = await dueBoard(actor, undefined);
   const inLane = (lane: string) => cards.filter((card) => card.lane === lane);
+  const view: BoardView = {
+    asOf,
+    decimalMark: actor.sites[0]?.decimalMark ?? '.',
+    mayOpenJob: allows(actor.role, 'balanceJob:open'),
+  };
   const shown = chosen === null ? LANES : [chosen];
   return (
     <>
@@ -62,8 +68,7 @@ export default async function DueBoardPage({ searchParams }: Props) {
           key={lane}
           lane={lane}
           cards={inLane(lane)}
-          asOf={asOf}
-          mayOpenJob={allows(actor.role, 'balanceJob:open')}
+          view={view}
           showEmpty={chosen !== null}
         />
       ))}

@@ -4,12 +4,13 @@ import { ZoneStamp } from '@/components/ui/zone-stamp';
 import { formatAge, formatNumber, formatQuantity, formatShare, NOT_MEASURED } from '@/lib/format';
 import { routes } from '@/lib/routes';
 import type { DueBoardCard } from '@/lib/schemas/due-board';
+import type { BoardView } from './board-view';
 import { nextBoundaryWords } from './next-boundary';
 
-type WatchTableProps = { cards: readonly DueBoardCard[]; asOf: string };
+type WatchTableProps = { cards: readonly DueBoardCard[]; view: BoardView };
 
 /** Machines of which nothing is due, one line each. */
-export function WatchTable({ cards, asOf }: WatchTableProps) {
+export function WatchTable({ cards, view }: WatchTableProps) {
   return (
     <Table caption="Machines to watch, by urgency">
       <thead>
@@ -26,15 +27,16 @@ export function WatchTable({ cards, asOf }: WatchTableProps) {
       </thead>
       <tbody>
         {cards.map((card) => (
-          <WatchRow key={card.machineId} card={card} asOf={asOf} />
+          <WatchRow key={card.machineId} card={card} view={view} />
         ))}
       </tbody>
     </Table>
   );
 }
 
-function WatchRow({ card, asOf }: { card: DueBoardCard; asOf: string }) {
-  const { decimalMark, standing } = card;
+function WatchRow({ card, view }: { card: DueBoardCard; view: BoardView }) {
+  const { standing } = card;
+  const { asOf, decimalMark } = view;
   return (
     <tr>
       <RowHead>

@@ -4,9 +4,10 @@ import type { DueFigure, DuePart } from '@/lib/domain/due/due-machine';
 import { formatNumber, formatQuantity, NOT_KNOWN, type DecimalMark } from '@/lib/format';
 import type { DueBoardCard } from '@/lib/schemas/due-board';
 
+type WorkingProps = { card: DueBoardCard; decimalMark: DecimalMark };
+
 /** How the score came about: every part with what went in, and the sum. */
-export function Working({ card }: { card: DueBoardCard }) {
-  const { decimalMark } = card;
+export function Working({ card, decimalMark }: WorkingProps) {
   const number = (value: number, decimals = 3) => formatNumber(value, { decimals, decimalMark });
   return (
     <details className="min-w-0 grow basis-80">

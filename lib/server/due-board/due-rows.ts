@@ -11,7 +11,6 @@ export type RulingRow = {
   siteName: string;
   areaName: string;
   timeZone: string;
-  decimalMark: '.' | ',';
   setupId: number | null;
   ab: number | null;
   bc: number | null;
@@ -64,7 +63,7 @@ const RULING = `
   )
   select distinct on (m.id) m.id as "machineId", m.tag, m.name, m.criticality,
          s.name as "siteName", a.name as "areaName", s.time_zone as "timeZone",
-         s.decimal_mark as "decimalMark", u.id as "setupId", ls.b_ab as ab, ls.b_bc as bc,
+         u.id as "setupId", ls.b_ab as ab, ls.b_bc as bc,
          ls.b_cd as cd, l.point_id as "pointId", p.label as "pointLabel", p.bearing_id as "bearingId"
     from machine m
     join site s on s.id = m.site_id

@@ -49,7 +49,6 @@ function cardOf(row: RankedRow, rows: DueRows, now: Date): DueBoardCard | string
     siteName: row.siteName,
     areaName: row.areaName,
     timeZone: row.timeZone,
-    decimalMark: row.decimalMark,
     pointId: row.pointId,
     pointLabel: row.pointLabel,
     readAt: iso(newest?.at ?? now),

@@ -26,7 +26,7 @@ const ZONES = `
      order by machine_id, taken_at desc, zone desc, value desc
   )
   select m.id as "machineId", m.tag, m.name, s.name as "siteName", s.time_zone as "timeZone",
-         s.decimal_mark as "decimalMark", n.label as "pointLabel", n.record_id as "recordId",
+         n.label as "pointLabel", n.record_id as "recordId",
          n.taken_at as at, n.before_value as "beforeValue", n.before_zone as "beforeZone",
          n.value as "afterValue", n.zone as "afterZone"
     from newest n join machine m on m.id = n.machine_id join site s on s.id = m.site_id
