@@ -14,18 +14,19 @@ type NumberRule = {
  * not a number, or is out of range, fails with a sentence naming what was typed and what is expected.
  */
 export function typedNumber(rule: NumberRule) {
-  return z.union([z.number(), z.string()]).transform((typed, context) => {
-    return numberOrIssue(rule, typed, context);
-  });
+  return z
+    .union([z.number(), z.string()], { error: notANumber(rule, '') })
+    .transform((typed, context) => numberOrIssue(rule, typed, context));
 }
 
 /** The same, where leaving it empty means "not known". */
 export function optionalNumber(rule: NumberRule) {
   // Not a union with `typedNumber`: a union answers with its own words where each member has failed.
   return z
-    .union([z.number(), z.string(), z.null(), z.undefined()])
+    .union([z.number(), z.string(), z.null()], { error: notANumber(rule, '') })
+    .default(null)
     .transform((typed, context): number | null => {
-      if (typed === null || typed === undefined || typed === '') return null;
+      if (typed === null || typed === '') return null;
       return numberOrIssue(rule, typed, context);
     });
 }
@@ -52,7 +53,8 @@ export function text(what: string, longest: number) {
 
 /** A tick: a form sends "on" where it is ticked and nothing where it is not. */
 export const tick = z
-  .union([z.boolean(), z.literal('on'), z.literal('true'), z.literal('false'), z.undefined()])
+  .union([z.boolean(), z.literal('on'), z.literal('true'), z.literal('false')])
+  .default(false)
   .transform((value) => value === true || value === 'on' || value === 'true');
 
 function readNumber(typed: string): number | null {
@@ -69,7 +71,6 @@ function notANumber(rule: NumberRule, typed: string): string {
 function outOfRange(rule: NumberRule, value: number): string | null {
   const { what, min, above, max } = rule;
   const unit = rule.unit ? `\u00a0${rule.unit}` : '';
-  if (!Number.isFinite(value)) return `Write ${what} as a finite number.`;
   if (above !== undefined && value <= above)
     return `${sentence(what)} is ${value}${unit}: it must be more than ${above}${unit}.`;
   if (min !== undefined && value < min)

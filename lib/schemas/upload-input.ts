@@ -5,7 +5,8 @@ import { id, optionalNumber, text } from './number';
 export const UPLOAD_BYTES_MAX = 60_000_000;
 
 const optionalId = z
-  .union([z.literal(''), z.null(), z.undefined(), id])
+  .union([z.literal(''), z.null(), id])
+  .default(null)
   .transform((value) => (typeof value === 'number' ? value : null));
 
 export const receiveUploadInput = z.object({
@@ -34,7 +35,6 @@ const columnChoice = z.object({
       z.literal('').transform(() => null),
       z.enum(['g', 'm/s2', 'mm/s', 'in/s', 'um', 'mil', 's', 'ms', 'us']),
       z.null(),
-      z.undefined().transform(() => null),
     ])
     .default(null),
 });
