@@ -7,7 +7,7 @@ import { visibleMachine } from '../scope';
 
 /** What the form for a new machine offers. */
 export const newMachineForm = query(
-  'register:read',
+  'register:edit',
   async ({ em, siteIds, actor }, _args: undefined): Promise<NewMachineDto> => {
     const areas = await em.find(
       Area,
@@ -32,7 +32,7 @@ export const newMachineForm = query(
 
 /** A machine's identity for its form. */
 export const machineForm = query(
-  'register:read',
+  'register:edit',
   async (context, machineId: number): Promise<MachineFormDto | null> => {
     const machine = await visibleMachine(context, machineId);
     if (!machine) return null;

@@ -11,7 +11,7 @@ import { visibleMachine } from '../scope';
 
 /** What opening a job on a machine needs; null where there is no machine, rotor or set-up. */
 export const newBalanceJob = query(
-  'balanceJob:read',
+  'balanceJob:open',
   async (context, machineId: number): Promise<NewJobDto | null> => {
     const { em } = context;
     const machine = await visibleMachine(context, machineId);

@@ -1,9 +1,10 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
-import { notFound } from 'next/navigation';
+import { forbidden, notFound } from 'next/navigation';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { PageHead } from '@/components/ui/page-head';
+import { allows } from '@/lib/domain/access/permissions';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
 import { newBalanceJob } from '@/lib/server/queries/new-balance-job';
@@ -15,6 +16,7 @@ type Props = { params: Promise<{ machineId: string }> };
 
 export default async function NewBalanceJobPage({ params }: Props) {
   const actor = await requireActor();
+  if (!allows(actor.role, 'balanceJob:open')) forbidden();
   const machineId = Number((await params).machineId);
   if (!Number.isInteger(machineId)) notFound();
   const dto = await newBalanceJob(actor, machineId);
