@@ -12,6 +12,8 @@ const BUILD = '.next-test';
 
 /** The product as built, on a database of its own with the demo plant; its address is EVENRUN_BASE_URL. */
 export default async function setup() {
+  // A product that runs already, with the demo plant in it: what a person tries while writing a test.
+  if (process.env.EVENRUN_BASE_URL) return;
   const given = process.env.TEST_DATABASE_URL;
   const cluster = given ? { url: given, end: () => Promise.resolve() } : await startTestCluster();
   const files = mkdtempSync(`${tmpdir()}/evenrun-files-`);

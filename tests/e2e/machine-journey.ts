@@ -1,0 +1,52 @@
+import type { Page } from 'playwright-core';
+import { routes } from '@/lib/routes';
+import { baseUrl } from '@/tests/support/chromium';
+
+export type TypedMachine = {
+  tag: string;
+  speeds: { lowest: number; highest: number; usual: number };
+  massKg: number;
+  spanM: number;
+  centreM: number;
+  planes: readonly { name: string; radiusMm: number; fromAM: number }[];
+};
+
+/** Enters a fan between bearings through its form and waits for its page; the address of that page. */
+export async function enterMachine(page: Page, machine: TypedMachine): Promise<string> {
+  await page.goto(baseUrl() + routes.newMachine());
+  await page.getByLabel('Tag', { exact: true }).fill(machine.tag);
+  await page.getByLabel('Name', { exact: true }).first().fill('Kiln exhaust fan');
+  await page.getByLabel('Kind').selectOption('fan between bearings');
+  await page.getByLabel('Area').fill('Kiln line');
+  await page.getByLabel('Power').fill('250');
+  await page.getByLabel('Lowest speed').fill(String(machine.speeds.lowest));
+  await page.getByLabel('Highest speed').fill(String(machine.speeds.highest));
+  await page.getByLabel('Usual speed').fill(String(machine.speeds.usual));
+  await page.getByLabel('B, stops a line').check();
+  await page.getByLabel('rigid', { exact: true }).check();
+  await typeRotor(page, machine);
+  await page.getByLabel('The mark: angle zero').fill('Punch mark on the hub');
+  await page.getByLabel('Tacho, from top').fill('0');
+  await page.getByLabel('rising').check();
+  await page.getByLabel('clockwise', { exact: true }).check();
+  await page.getByLabel('Limit set').selectOption({ index: 1 });
+  await page.getByRole('button', { name: 'Enter machine' }).click();
+  await page.waitForURL(/\/machines\/\d+$/);
+  return page.url();
+}
+
+async function typeRotor(page: Page, { tag, massKg, spanM, centreM, planes }: TypedMachine) {
+  await page.getByLabel('Serial number').fill(`${tag}-R1`);
+  await page.getByLabel('Mass', { exact: true }).fill(String(massKg));
+  await page.getByLabel('Balance quality grade G').fill('6.3');
+  await page.getByLabel('Distance between bearings').fill(String(spanM));
+  await page.getByLabel('Centre of mass, from bearing A').fill(String(centreM));
+  await page.locator('[name="bearings.0.fromAM"]').fill('0');
+  await page.locator('[name="bearings.1.fromAM"]').fill(String(spanM));
+  for (const [index, plane] of planes.entries()) {
+    if (index > 0) await page.getByRole('button', { name: 'Add a plane' }).click();
+    await page.locator(`[name="planes.${index}.name"]`).fill(plane.name);
+    await page.locator(`[name="planes.${index}.radiusMm"]`).fill(String(plane.radiusMm));
+    await page.locator(`[name="planes.${index}.fromAM"]`).fill(String(plane.fromAM));
+  }
+}
