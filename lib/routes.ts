@@ -19,6 +19,7 @@ export const routes = {
   workbench: () => '/workbench',
   settings: () => '/settings',
   people: () => '/settings/people',
+  person: (personId: number) => `/settings/people/${personId}`,
   limitSets: () => '/settings/limit-sets',
   styleSheet: () => '/settings/style-sheet',
   api: {

@@ -4,6 +4,7 @@ import { BalanceJob } from '@/entities/balance-job';
 import { Point } from '@/entities/bearing';
 import { Machine } from '@/entities/machine';
 import { MeasuredRecord } from '@/entities/measured-record';
+import { Person, SiteAccess } from '@/entities/person';
 import { Upload } from '@/entities/upload';
 import { fail } from '@/lib/domain/result';
 
@@ -49,4 +50,10 @@ export function visibleJob({ em, siteIds }: Scope, jobId: number) {
     { id: jobId, site: { $in: siteIds } },
     { populate: ['machine', 'rotor', 'setup', 'site'] },
   );
+}
+
+/** The person of that id, if a site of theirs is one of the actor's. */
+export async function visiblePerson({ em, siteIds }: Scope, personId: number) {
+  const shared = await em.count(SiteAccess, { person: personId, site: { $in: siteIds } });
+  return shared === 0 ? null : em.findOne(Person, { id: personId });
 }

@@ -1,0 +1,221 @@
+import { compare } from 'bcryptjs';
+import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { AuditEvent } from '@/entities/audit-event';
+import { Person, Session, SiteAccess } from '@/entities/person';
+import type { Role } from '@/lib/domain/access/permissions';
+import type { Actor } from '@/lib/schemas/actor';
+import { actorOf } from '@/lib/server/actor';
+import {
+  closePerson,
+  createPerson,
+  editPerson,
+  reopenPerson,
+  setPassword,
+} from '@/lib/server/commands/people';
+import { closeDatabase } from '@/lib/server/db';
+import { people } from '@/lib/server/queries/people';
+import { signIn } from '@/lib/server/sign-in';
+import config from '@/mikro-orm.config';
+import { freshDatabase } from '@/tests/support/fresh-database';
+import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+
+let orm: MikroORM;
+let em: EntityManager;
+let plant: SmallPlant;
+let drop: () => Promise<void>;
+let made = 0;
+
+beforeAll(async () => {
+  const database = await freshDatabase();
+  drop = database.close;
+  process.env.DATABASE_URL = database.url;
+  orm = await MikroORM.init({ ...config, clientUrl: database.url });
+  em = orm.em.fork();
+  plant = await seedSmallPlant(em);
+});
+
+afterAll(async () => {
+  await closeDatabase();
+  await orm.close(true);
+  await drop();
+});
+
+const administrator = () => plant.at('administrator');
+const PASSWORD = 'three plain words';
+
+function newPerson(over: Record<string, unknown> = {}) {
+  made += 1;
+  return {
+    name: `Person ${made}`,
+    email: `person.${made}@example.test`,
+    role: 'technician' as Role,
+    siteIds: [plant.home.siteId],
+    password: PASSWORD,
+    ...over,
+  };
+}
+
+async function enter(over: Record<string, unknown> = {}): Promise<number> {
+  const result = await createPerson(administrator(), newPerson(over));
+  if (!result.ok) throw new Error(result.failure.message);
+  return result.value.personId;
+}
+
+/** Gives a person a further site, as an administrator of that site would. */
+async function giveSite(personId: number, siteId: number): Promise<void> {
+  em.create(SiteAccess, { person: personId, site: siteId });
+  await em.flush();
+}
+
+async function actorFor(personId: number): Promise<Actor> {
+  const fresh = em.fork();
+  return actorOf(fresh, await fresh.findOneOrFail(Person, personId));
+}
+
+const openSessions = (personId: number) =>
+  em.fork().count(Session, { person: personId, endedAt: null });
+
+describe('a person entered', () => {
+  it('signs in with the address in lower case and the password; neither stands in the audit', async () => {
+    const personId = await enter({ email: 'Mixed.Case@Example.test' });
+    expect(await signIn('mixed.case@example.test', PASSWORD)).toMatchObject({ ok: true });
+    const person = await em.fork().findOneOrFail(Person, personId);
+    expect(await compare(PASSWORD, person.passwordHash)).toBe(true);
+    const audits = await em.fork().find(AuditEvent, { entity: 'Person', entityId: personId });
+    expect(audits).toHaveLength(1);
+    const written = JSON.stringify(audits);
+    expect(written).not.toContain(PASSWORD);
+    expect(written).not.toContain('$2');
+  });
+
+  it.each([
+    [{ email: 'no address' }, 'email', 'e-mail address'],
+    [{ password: 'short' }, 'password', 'at least 12 characters'],
+    [{ password: 'ü'.repeat(37) }, 'password', 'at most 72 bytes'],
+    [{ siteIds: [] }, 'siteIds', 'at least one site'],
+    [{ role: 'king' }, 'role', 'Choose a role'],
+    [{ name: ' ' }, 'name', 'Write the name'],
+  ])('is refused in words: %o', async (over, field, words) => {
+    const result = await createPerson(administrator(), newPerson(over));
+    expect(result).toMatchObject({ ok: false, failure: { field } });
+    expect(result.ok ? '' : result.failure.message).toContain(words);
+  });
+
+  it('cannot have an address twice', async () => {
+    await enter({ email: 'twice@example.test' });
+    expect(
+      await createPerson(administrator(), newPerson({ email: 'TWICE@example.test' })),
+    ).toMatchObject({ failure: { field: 'email', code: 'taken' } });
+  });
+
+  it.each(['reader', 'technician', 'engineer', 'planner'] as const)(
+    'is not entered by a %s',
+    async (role) => {
+      expect(await createPerson(plant.at(role), newPerson())).toMatchObject({
+        failure: { code: 'forbidden' },
+      });
+    },
+  );
+
+  it('is given no site that the administrator has not', async () => {
+    const siteIds = [plant.home.siteId, plant.away.siteId];
+    expect(await createPerson(administrator(), newPerson({ siteIds }))).toMatchObject({
+      failure: { code: 'not-found' },
+    });
+  });
+});
+
+describe('a person edited', () => {
+  it('keeps the sites that the administrator cannot see', async () => {
+    const personId = await enter();
+    await giveSite(personId, plant.away.siteId);
+    const siteIds = [plant.home.siteId];
+    expect(
+      await editPerson(administrator(), { personId, name: 'Renamed', role: 'planner', siteIds }),
+    ).toMatchObject({ ok: true });
+    const actor = await actorFor(personId);
+    expect(actor).toMatchObject({ name: 'Renamed', role: 'planner' });
+    expect(actor.sites.map(({ id }) => id).sort()).toEqual(
+      [plant.home.siteId, plant.away.siteId].sort(),
+    );
+    const row = (await people(administrator(), undefined)).people.find(({ id }) => id === personId);
+    expect(row).toMatchObject({ sites: [{ id: plant.home.siteId }], otherSites: 1 });
+  });
+
+  it('does not change the administrator’s own role', async () => {
+    const { personId, name } = administrator();
+    const siteIds = [plant.home.siteId];
+    expect(
+      await editPerson(administrator(), { personId, name, role: 'reader', siteIds }),
+    ).toMatchObject({ failure: { code: 'own-account', field: 'role' } });
+  });
+
+  it('leaves every site an administrator, also the one that the editor cannot see', async () => {
+    const siteIds = [plant.home.siteId];
+    const personId = await enter({ role: 'administrator' });
+    await giveSite(personId, plant.away.siteId);
+    const demote = () =>
+      editPerson(administrator(), { personId, name: 'Sole', role: 'reader', siteIds });
+    const refused = await demote();
+    expect(refused).toMatchObject({ failure: { code: 'last-administrator' } });
+    expect(refused.ok ? '' : refused.failure.message).toContain('Millside');
+    const other = await enter({ role: 'administrator' });
+    await giveSite(other, plant.away.siteId);
+    expect(await demote()).toMatchObject({ ok: true });
+  });
+});
+
+describe('a new password', () => {
+  it('ends every session and replaces the old one', async () => {
+    const personId = await enter({ email: 'forgot@example.test' });
+    expect(await signIn('forgot@example.test', PASSWORD)).toMatchObject({ ok: true });
+    expect(await openSessions(personId)).toBe(1);
+    const password = 'another three words';
+    expect(await setPassword(administrator(), { personId, password })).toMatchObject({ ok: true });
+    expect(await openSessions(personId)).toBe(0);
+    expect(await signIn('forgot@example.test', PASSWORD)).toMatchObject({ ok: false });
+    expect(await signIn('forgot@example.test', password)).toMatchObject({ ok: true });
+  });
+});
+
+describe('an account closed', () => {
+  it('ends its sessions, signs in no more, and opens again', async () => {
+    const personId = await enter({ email: 'leaver@example.test' });
+    expect(await signIn('leaver@example.test', PASSWORD)).toMatchObject({ ok: true });
+    const closed = await closePerson(administrator(), { personId, reason: 'Left the plant' });
+    expect(closed).toMatchObject({ ok: true });
+    expect(await openSessions(personId)).toBe(0);
+    expect(await signIn('leaver@example.test', PASSWORD)).toMatchObject({
+      failure: { code: 'wrong' },
+    });
+    expect(
+      await closePerson(administrator(), { personId, reason: 'Left the plant' }),
+    ).toMatchObject({ failure: { code: 'already' } });
+    const reopened = await reopenPerson(administrator(), { personId, reason: 'Came back' });
+    expect(reopened).toMatchObject({ ok: true });
+    expect(await signIn('leaver@example.test', PASSWORD)).toMatchObject({ ok: true });
+    const audits = await em.fork().find(AuditEvent, { entity: 'Person', entityId: personId });
+    expect(audits.map(({ action, reason }) => [action, reason ?? null])).toEqual([
+      ['createPerson', null],
+      ['closePerson', 'Left the plant'],
+      ['reopenPerson', 'Came back'],
+    ]);
+  });
+
+  it('is never one’s own, nor the last administrator’s', async () => {
+    const { personId } = administrator();
+    expect(await closePerson(administrator(), { personId, reason: 'x' })).toMatchObject({
+      failure: { code: 'own-account' },
+    });
+    const visitor = await enter({ role: 'administrator' });
+    const others = await em.fork().find(Person, { role: 'administrator', id: { $ne: visitor } });
+    for (const other of others)
+      await em.nativeUpdate(Person, { id: other.id }, { state: 'closed' });
+    expect(await closePerson(administrator(), { personId: visitor, reason: 'x' })).toMatchObject({
+      failure: { code: 'last-administrator' },
+    });
+    for (const other of others)
+      await em.nativeUpdate(Person, { id: other.id }, { state: 'active' });
+  });
+});
