@@ -1,10 +1,10 @@
 'use client';
 
+import { AnswerCard } from '@/components/balancing/answer-card';
 import { Notice } from '@/components/ui/notice';
 import { formatNumber, formatQuantity } from '@/lib/format';
 import type { BalanceJobDto, TrialCheck } from '@/lib/schemas/balance-job';
 import { acceptAnswerAction } from './actions';
-import { AnswerCard } from './answer-card';
 import { StepForm } from './step-form';
 
 /** The answer to look at and accept, or in words why there is none. */

@@ -1,9 +1,9 @@
 'use client';
 
+import { AnswerCard } from '@/components/balancing/answer-card';
 import { Panel } from '@/components/ui/panel';
 import { formatDegrees, formatMass, formatNumber, formatQuantity } from '@/lib/format';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
-import { AnswerCard } from './answer-card';
 import { AnswerStep } from './answer-step';
 import { BaseStep } from './base-step';
 import { CheckTable } from './check-table';

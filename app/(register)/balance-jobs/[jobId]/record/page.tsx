@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
+import { AnswerCard } from '@/components/balancing/answer-card';
 import { Notice } from '@/components/ui/notice';
 import { PageHead } from '@/components/ui/page-head';
 import { Panel } from '@/components/ui/panel';
@@ -7,7 +8,6 @@ import { STANDING_SENTENCE } from '@/lib/domain/cautions';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
 import { jobRecord } from '@/lib/server/queries/job-record';
-import { AnswerCard } from '../answer-card';
 import { CheckTable } from '../check-table';
 import { Faces } from '../faces';
 import { RunsTable } from '../runs-table';

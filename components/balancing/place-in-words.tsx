@@ -3,7 +3,10 @@ import { arcMm, positionWords } from '@/lib/domain/drawing/rotor-place';
 import { formatClock, formatDegrees, formatQuantity } from '@/lib/format';
 import type { PlaneDto, SetupDto } from '@/lib/schemas/balance-job';
 
-type PlaceInWordsProps = { plane: PlaneDto | undefined; setup: SetupDto; angleDeg: number };
+export type PlacePlane = Pick<PlaneDto, 'name' | 'radiusMm' | 'positions'>;
+export type PlaceSetup = Pick<SetupDto, 'mark' | 'rotationFromDriveEnd'>;
+
+type PlaceInWordsProps = { plane: PlacePlane | undefined; setup: PlaceSetup; angleDeg: number };
 
 /** One place said in several ways, so that it can be laid out with a tape, a count or a look. */
 export function PlaceInWords({ plane, setup, angleDeg }: PlaceInWordsProps) {

@@ -1,10 +1,26 @@
 import { Notice } from '@/components/ui/notice';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
-import { PlaceInWords } from './place-in-words';
-import { formatDegrees, formatLag, formatMass, formatNumber, formatQuantity } from '@/lib/format';
-import type { AnswerDto, BalanceJobDto } from '@/lib/schemas/balance-job';
+import {
+  formatDegrees,
+  formatLag,
+  formatMass,
+  formatNumber,
+  formatQuantity,
+  type DecimalMark,
+} from '@/lib/format';
+import type { AnswerDto, PointDto } from '@/lib/schemas/balance-job';
+import { PlaceInWords, type PlaceSetup, type PlacePlane } from './place-in-words';
 
-type AnswerCardProps = { job: BalanceJobDto; answer: AnswerDto };
+/** What an answer is read against: a balance job, or runs typed on the workbench. */
+export type AnswerGround = {
+  readonly unit: string;
+  readonly site: { readonly decimalMark: DecimalMark };
+  readonly planes: readonly (PlacePlane & { readonly id: number })[];
+  readonly points: readonly Pick<PointDto, 'id' | 'label'>[];
+  readonly setup: PlaceSetup;
+};
+
+type AnswerCardProps = { job: AnswerGround; answer: AnswerDto };
 
 /** Where the weight belongs: plane, grams, place in several ways, force, and what to expect after. */
 export function AnswerCard({ job, answer }: AnswerCardProps) {
@@ -121,6 +137,6 @@ function uncertainty(grams: number | null, degrees: number | null): string {
   return `± ${formatMass(grams)}, ± ${formatDegrees(degrees)}`;
 }
 
-function nameOf(planes: BalanceJobDto['planes'], id: number): string {
+function nameOf(planes: AnswerGround['planes'], id: number): string {
   return planes.find((plane) => plane.id === id)?.name ?? '';
 }
