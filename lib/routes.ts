@@ -16,7 +16,7 @@ export const routes = {
   balanceJob: (jobId: number) => `/balance-jobs/${jobId}`,
   jobRecord: (jobId: number) => `/balance-jobs/${jobId}/record`,
   dueBoard: (query = '') => `/due-board${query}`,
-  workbench: () => '/workbench',
+  workbench: (query = '') => `/workbench${query}`,
   settings: () => '/settings',
   people: () => '/settings/people',
   person: (personId: number) => `/settings/people/${personId}`,

@@ -1,7 +1,7 @@
 import { useId, type InputHTMLAttributes, type ReactNode } from 'react';
 import type { ActionState } from '@/lib/schemas/action-state';
 import { FieldError } from './field-frame';
-import { errorOf } from './field-state';
+import { errorOf, typedOf } from './field-state';
 
 type CheckFieldProps = Omit<
   InputHTMLAttributes<HTMLInputElement>,
@@ -25,8 +25,8 @@ export function CheckField({
 }: CheckFieldProps) {
   const id = useId();
   const error = errorOf(state, name);
-  const ticked =
-    state?.status === 'failed' ? state.values[name] === (rest.value ?? 'on') : defaultChecked;
+  const typed = typedOf(state);
+  const ticked = typed ? typed[name] === String(rest.value ?? 'on') : defaultChecked;
   const start = rest.checked === undefined ? { defaultChecked: ticked } : {};
   return (
     <div>

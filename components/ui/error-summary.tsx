@@ -4,11 +4,13 @@ import { useEffect, useRef } from 'react';
 import type { Failure } from '@/lib/domain/result';
 import type { ActionState } from '@/lib/schemas/action-state';
 
+type ErrorSummaryProps = { state: ActionState; title?: string };
+
 /**
  * What stopped the form, on top of it and focused; each line leads to its field. Stands inside the
  * form it speaks of.
  */
-export function ErrorSummary({ state }: { state: ActionState }) {
+export function ErrorSummary({ state, title = 'Nothing was saved yet' }: ErrorSummaryProps) {
   const box = useRef<HTMLDivElement>(null);
   useEffect(() => {
     if (state.status === 'failed') box.current?.focus();
@@ -22,7 +24,7 @@ export function ErrorSummary({ state }: { state: ActionState }) {
       tabIndex={-1}
       className="rounded border-2 border-fault bg-sheet p-4 focus:outline-none"
     >
-      <h2 className="text-base font-semibold">Nothing was saved yet</h2>
+      <h2 className="text-base font-semibold">{title}</h2>
       <ul className="mt-1 flex flex-col gap-1">
         {failures.map((failure) => (
           <li key={`${failure.code} ${failure.field ?? ''} ${failure.message}`}>

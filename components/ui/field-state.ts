@@ -7,12 +7,19 @@ export function errorOf(state: ActionState | undefined, name: string): string | 
   return all.find((failure) => failure.field === name)?.message;
 }
 
-/** What the field starts with: what was typed before a failure, otherwise what the page gives. */
+/** What the field starts with: what was typed before, otherwise what the page gives. */
 export function startOf(
   state: ActionState | undefined,
   name: string,
   given: string | undefined,
 ): string {
-  if (state?.status === 'failed') return state.values[name] ?? '';
-  return given ?? '';
+  const typed = typedOf(state);
+  return typed ? (typed[name] ?? '') : (given ?? '');
+}
+
+/** What was typed before the action, where it hands that back. */
+export function typedOf(
+  state: ActionState | undefined,
+): Readonly<Record<string, string>> | undefined {
+  return state === undefined || state.status === 'idle' ? undefined : state.values;
 }

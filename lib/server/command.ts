@@ -11,6 +11,7 @@ import type { Actor } from '@/lib/schemas/actor';
 import { clockNow } from './clock';
 import { constraintFailure } from './constraint-failures';
 import { getEntityManager } from './db';
+import { firstIssue } from './first-issue';
 import { openSiteIds } from './query';
 
 export type AuditEntry = {
@@ -114,13 +115,6 @@ function auditRow(
     after: entry.after ?? null,
     reason: entry.reason ?? null,
   });
-}
-
-function firstIssue(error: z.ZodError): Failure {
-  const issue = error.issues[0];
-  const field = issue?.path.map(String).join('.');
-  const message = issue?.message ?? 'The input could not be read.';
-  return field ? { code: 'input', message, field } : { code: 'input', message };
 }
 
 function forbiddenMessage(actor: Actor): string {

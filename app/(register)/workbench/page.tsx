@@ -1,0 +1,52 @@
+import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
+import { PageHead } from '@/components/ui/page-head';
+import { Tabs } from '@/components/ui/tabs';
+import { allows } from '@/lib/domain/access/permissions';
+import { routes } from '@/lib/routes';
+import { requireActor } from '@/lib/server/actor';
+import { SolveForm } from './solve-form';
+import { SplitForm } from './split-form';
+import { ToleranceForm } from './tolerance-form';
+import { toolFrom, TOOLS, type Tool } from './tools';
+
+export const metadata: Metadata = { title: 'Workbench' };
+
+type Props = { searchParams: Promise<{ tool?: string | string[] }> };
+
+export default async function WorkbenchPage({ searchParams }: Props) {
+  const actor = await requireActor();
+  if (!allows(actor.role, 'workbench:use')) forbidden();
+  const tool = toolFrom((await searchParams).tool);
+  const decimalMark = actor.sites[0]?.decimalMark ?? '.';
+  return (
+    <>
+      <PageHead
+        title="Workbench"
+        note="The computations on their own. Nothing is saved: what hangs on a rotor belongs into a balance job."
+      />
+      <Tabs
+        label="Computations"
+        tabs={TOOLS.map(({ key, label }) => ({
+          label,
+          href: routes.workbench(key === 'one-plane' ? '' : `?tool=${key}`),
+          current: key === tool,
+        }))}
+      />
+      {formOf(tool, decimalMark)}
+    </>
+  );
+}
+
+function formOf(tool: Tool, decimalMark: '.' | ',') {
+  switch (tool) {
+    case 'one-plane':
+      return <SolveForm key={tool} planes={1} decimalMark={decimalMark} />;
+    case 'two-planes':
+      return <SolveForm key={tool} planes={2} decimalMark={decimalMark} />;
+    case 'tolerance':
+      return <ToleranceForm decimalMark={decimalMark} />;
+    case 'split':
+      return <SplitForm decimalMark={decimalMark} />;
+  }
+}

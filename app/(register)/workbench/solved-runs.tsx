@@ -1,0 +1,83 @@
+'use client';
+
+import { AnswerCard } from '@/components/balancing/answer-card';
+import type { FaceWeight } from '@/components/rotor-face/face-types';
+import { RotorFace } from '@/components/rotor-face/rotor-face';
+import { Caution } from '@/components/ui/caution';
+import { Notice } from '@/components/ui/notice';
+import { Panel } from '@/components/ui/panel';
+import { CAUTIONS } from '@/lib/domain/cautions';
+import type { DecimalMark } from '@/lib/format';
+import type { SolvedRuns } from '@/lib/schemas/workbench';
+
+type SolvedRunsPanelsProps = { solved: SolvedRuns; decimalMark: DecimalMark };
+
+/** The answer with its cautions, and each plane drawn; in words why there is none. */
+export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps) {
+  const { answer, refusal } = solved;
+  if (!answer)
+    return (
+      <Notice kind="failure" title="No answer">
+        {refusal}
+      </Notice>
+    );
+  const ground = {
+    ...solved,
+    site: { decimalMark },
+    planes: solved.planes.map((plane) => ({ ...plane, positions: [] })),
+    setup: { mark: 'angle zero', rotationFromDriveEnd: solved.rotationFromDriveEnd },
+  };
+  return (
+    <>
+      <Panel title="Answer">
+        <div className="flex flex-col gap-4">
+          <AnswerCard job={ground} answer={answer} />
+          <Caution code="SAF-01, SAF-03">
+            {CAUTIONS['SAF-01'].text} {CAUTIONS['SAF-03'].text}
+          </Caution>
+          <Caution code="SAF-06">{CAUTIONS['SAF-06'].text}</Caution>
+        </div>
+      </Panel>
+      {solved.planes.map((plane, index) => (
+        <Panel key={plane.id} title={`Plane ${plane.name}`}>
+          <RotorFace
+            plane={{
+              name: `Plane ${plane.name}`,
+              radiusMm: plane.radiusMm,
+              rotationFromDriveEnd: solved.rotationFromDriveEnd === 'clockwise' ? 'cw' : 'ccw',
+              decimalMark,
+            }}
+            weights={weightsOf(solved, plane.id)}
+            readings={{
+              unit: solved.unit,
+              point: solved.points[index]?.label ?? '',
+              vectors: solved.walks[index] ?? [],
+            }}
+          />
+        </Panel>
+      ))}
+    </>
+  );
+}
+
+function weightsOf({ staying, answer }: SolvedRuns, planeId: number): FaceWeight[] {
+  const on = staying
+    .filter((weight) => weight.planeId === planeId)
+    .map(({ massG, angleDeg }): FaceWeight => ({
+      id: 'trial',
+      massG,
+      angleDeg,
+      label: 'trial',
+      state: 'on',
+    }));
+  const proposed = (answer?.planes ?? [])
+    .filter((plane) => plane.planeId === planeId)
+    .map(({ massG, angleDeg }): FaceWeight => ({
+      id: 'answer',
+      massG,
+      angleDeg,
+      label: 'answer',
+      state: 'proposed',
+    }));
+  return [...on, ...proposed];
+}

@@ -1,0 +1,137 @@
+'use client';
+
+import type { FaceWeight } from '@/components/rotor-face/face-types';
+import { RotorFace } from '@/components/rotor-face/rotor-face';
+import { Caution } from '@/components/ui/caution';
+import { Field } from '@/components/ui/field';
+import { Panel } from '@/components/ui/panel';
+import { RadioField } from '@/components/ui/radio-field';
+import { RowHead, Table, Td, Th } from '@/components/ui/table';
+import { CAUTIONS } from '@/lib/domain/cautions';
+import { formatDegrees, formatMass, formatNumber, type DecimalMark } from '@/lib/format';
+import type { ActionState } from '@/lib/schemas/action-state';
+import type { SolvedSplit } from '@/lib/schemas/workbench';
+import { splitAction } from './actions';
+import { ComputedForm } from './computed-form';
+import { useComputation } from './use-computation';
+
+/** A weight carried by the numbered positions either side of it. */
+export function SplitForm({ decimalMark }: { decimalMark: DecimalMark }) {
+  const { state, onSubmit, pending, answer } = useComputation<SolvedSplit>(splitAction);
+  return (
+    <div className="grid items-start gap-5 xl:grid-cols-2">
+      <ComputedForm {...{ state, onSubmit, pending }}>
+        <Panel title="The weight">
+          <div className="grid gap-4 sm:grid-cols-2">
+            <Field name="massG" label="Mass" unit="g" kind="decimal" state={state} />
+            <Field name="radiusMm" label="Radius" unit="mm" kind="decimal" state={state} />
+            <Field
+              name="angleDeg"
+              label="Angle from the mark"
+              unit="°"
+              kind="decimal"
+              state={state}
+            />
+          </div>
+        </Panel>
+        <Panel title="The positions" note="equally spaced, all on the radius of the weight">
+          <Positions state={state} />
+        </Panel>
+      </ComputedForm>
+      <div className="flex min-w-0 flex-col gap-5" aria-live="polite">
+        {answer ? (
+          <Split solved={answer} decimalMark={decimalMark} />
+        ) : (
+          <p className="text-ink-soft">The shares stand here once everything is typed.</p>
+        )}
+      </div>
+    </div>
+  );
+}
+
+function Positions({ state }: { state: ActionState }) {
+  const senses = [
+    { value: 'against', label: 'against rotation' },
+    { value: 'with', label: 'with rotation' },
+  ];
+  return (
+    <div className="grid gap-4 sm:grid-cols-2">
+      <Field name="positions" label="Number of positions" kind="whole" state={state} />
+      <Field name="firstDeg" label="Position 1 at" unit="°" kind="decimal" state={state} />
+      <RadioField
+        name="rotationFromDriveEnd"
+        label="It turns, seen from the drive end"
+        state={state}
+        choices={[
+          { value: 'clockwise', label: 'clockwise' },
+          { value: 'counter-clockwise', label: 'counter-clockwise' },
+        ]}
+      />
+      <RadioField name="angleSense" label="Degrees are counted" state={state} choices={senses} />
+      <RadioField name="numbered" label="Positions are numbered" state={state} choices={senses} />
+      <Field
+        name="maxG"
+        label="Most on one position (optional)"
+        unit="g"
+        kind="decimal"
+        state={state}
+      />
+    </div>
+  );
+}
+
+function Split({ solved, decimalMark }: { solved: SolvedSplit; decimalMark: DecimalMark }) {
+  const { shares, massG, angleDeg, sumOverWhole, positions } = solved;
+  const proposed = shares.map((share): FaceWeight => ({
+    id: share.label,
+    massG: share.massG,
+    angleDeg: share.angleDeg,
+    label: `position ${share.label}`,
+    state: 'proposed',
+  }));
+  return (
+    <Panel title="Shares">
+      <div className="flex flex-col gap-4">
+        <Table caption="What each position carries" roomy>
+          <thead>
+            <tr>
+              <Th>position</Th>
+              <Th numeric>fit</Th>
+              <Th numeric>at, against rotation</Th>
+            </tr>
+          </thead>
+          <tbody>
+            {shares.map((share) => (
+              <tr key={share.label}>
+                <RowHead>{share.label}</RowHead>
+                <Td numeric className="text-base font-semibold">
+                  {formatMass(share.massG, decimalMark)}
+                </Td>
+                <Td numeric>{formatDegrees(share.angleDeg, 1, decimalMark)}</Td>
+              </tr>
+            ))}
+          </tbody>
+        </Table>
+        <p className="text-sm text-ink-soft">
+          Together they act as {formatMass(massG, decimalMark)} at{' '}
+          {formatDegrees(angleDeg, 1, decimalMark)} against rotation; their sum is{' '}
+          <span className="figures">
+            {formatNumber(sumOverWhole, { decimals: 2, decimalMark })}
+          </span>{' '}
+          times as much.
+        </p>
+        <Caution code="SAF-06">{CAUTIONS['SAF-06'].text}</Caution>
+        <RotorFace
+          plane={{
+            name: 'The plane',
+            radiusMm: solved.radiusMm,
+            rotationFromDriveEnd: solved.rotationFromDriveEnd === 'clockwise' ? 'cw' : 'ccw',
+            positions,
+            decimalMark,
+          }}
+          weights={proposed}
+        />
+      </div>
+    </Panel>
+  );
+}

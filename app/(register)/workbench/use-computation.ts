@@ -1,0 +1,21 @@
+'use client';
+
+import { startTransition, useActionState, type SyntheticEvent } from 'react';
+import { IDLE, type ActionState } from '@/lib/schemas/action-state';
+
+type ComputeAction<Value> = (
+  previous: ActionState<Value>,
+  form: FormData,
+) => Promise<ActionState<Value>>;
+
+/** Sends a form to a computation. The form keeps what was typed, whatever comes back. */
+export function useComputation<Value>(action: ComputeAction<Value>) {
+  const [state, submit, pending] = useActionState<ActionState<Value>, FormData>(action, IDLE);
+  // Not `action={submit}`: React would empty the form once the answer is there.
+  const onSubmit = (event: SyntheticEvent<HTMLFormElement>) => {
+    event.preventDefault();
+    const form = new FormData(event.currentTarget);
+    if (!pending) startTransition(() => submit(form));
+  };
+  return { state, onSubmit, pending, answer: state.status === 'ok' ? state.value : null };
+}
