@@ -1,0 +1,7 @@
+import { ForbiddenWords } from '@/components/register/page-failures';
+
+export const metadata = { title: 'Not permitted' };
+
+export default function Forbidden() {
+  return <ForbiddenWords />;
+}

@@ -1,0 +1,7 @@
+import { NotFoundWords } from '@/components/register/page-failures';
+
+export const metadata = { title: 'Not found' };
+
+export default function NotFound() {
+  return <NotFoundWords />;
+}
