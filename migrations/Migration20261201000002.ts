@@ -66,18 +66,14 @@ const neverDeleted = (table: string) =>
 const frozenFacts = [
   refuse,
   onlyChanging,
-  ...['audit_event', 'waveform', 'answer', 'run_vector', 'sign_off', 'caution_shown'].map(appendOnly),
+  ...['audit_event', 'waveform', 'answer', 'run_vector', 'sign_off', 'caution_shown'].map(
+    appendOnly,
+  ),
   neverEmptied('audit_event'),
   keeps('run', 'state', 'state_reason'),
   keeps('measured_record', 'state', 'hold_reasons', 'decision_reason', 'point_id'),
-  keeps(
-    'weight',
-    'stays',
-    'permanent',
-    'ended_at',
-    'ending',
-    'ended_by_id',
-    'end_reason',
+  keeps('weight', 'stays', 'permanent', 'ended_at', 'ending', 'ended_by_id', 'end_reason'),
+  ...['run', 'measured_record', 'weight', 'balance_job', 'coefficient', 'machine'].map(
+    neverDeleted,
   ),
-  ...['run', 'measured_record', 'weight', 'balance_job', 'coefficient', 'machine'].map(neverDeleted),
 ];

@@ -7,6 +7,7 @@ import { Setup } from '@/entities/setup';
 import type { Area, Site } from '@/entities/site';
 import type { ModelledMachine } from '@/lib/domain/plant-model/modelled-machine';
 import type { Actor } from '@/lib/schemas/actor';
+import { demoSerial } from './demo-serial';
 import { modelOf, type MachineSpec } from './machine-spec';
 
 /** A machine of the register together with the model that shakes it. */
@@ -99,7 +100,7 @@ function createMachine(em: EntityManager, spec: MachineSpec, { site, area, start
 function createRotor(em: EntityManager, spec: MachineSpec, site: Site): Rotor {
   return em.create(Rotor, {
     site,
-    serial: `${spec.tag}-R1`,
+    serial: demoSerial(spec.tag),
     name: spec.kind.includes('fan') || spec.kind === 'blower' ? 'Wheel' : 'Rotor',
     massKg: spec.massKg,
     massSource: 'known',

@@ -110,6 +110,3 @@ export const CAUTIONS = {
     needsName: true,
   },
 } as const satisfies Readonly<Record<string, Caution>>;
-
-/** Id of a caution, as it is kept with the person and the time. */
-export type CautionId = keyof typeof CAUTIONS;

@@ -18,7 +18,6 @@ const mustTick = (message: string) => tick.refine((ticked) => ticked, { error: m
 const namedPerson = (what: string) => text(what, 120);
 
 export const AMPLITUDE_UNITS = ['mm/s rms', 'mm/s pk', 'in/s pk', 'µm p-p', 'mil p-p'] as const;
-export type AmplitudeUnit = (typeof AMPLITUDE_UNITS)[number];
 
 export const openBalanceJobInput = z
   .object({
