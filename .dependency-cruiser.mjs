@@ -23,7 +23,7 @@ const only = (name, path, packages) => ({
 const pkg = (names) => `^(node_modules/(@types/)?(${names})/|(${names})$)`;
 
 /** @type {import('dependency-cruiser').IConfiguration} */
-export default {
+const config = {
   forbidden: [
     from('domain-imports-itself', '^lib/domain', ['^lib/domain'], 'Arithmetic knows nothing else.'),
     only('domain-packages', '^lib/domain', pkg('fft\\.js|papaparse|ml-matrix')),
@@ -85,3 +85,5 @@ export default {
     },
   },
 };
+
+export default config;

@@ -10,6 +10,7 @@ export const routes = {
   reading: (recordId: number) => `/readings/${recordId}`,
   inTray: (query = '') => `/in-tray${query}`,
   newUpload: (query = '') => `/in-tray/new${query}`,
+  sampleFile: () => '/samples/waveform-with-tacho.csv',
   upload: (uploadId: number) => `/in-tray/${uploadId}`,
   balanceJobs: () => '/balance-jobs',
   newBalanceJob: (machineId: number) => `/machines/${machineId}/new-balance-job`,

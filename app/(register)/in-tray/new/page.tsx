@@ -24,6 +24,11 @@ export default async function NewUploadPage({ searchParams }: Search) {
         title="Upload files"
         crumbs={[{ label: 'In-tray', href: routes.inTray() }, { label: 'Upload' }]}
         note="Each file is looked at first; nothing counts before you have confirmed how it is read."
+        actions={
+          <a className="link" href={routes.sampleFile()} download>
+            A sample file
+          </a>
+        }
       />
       <DropFiles
         points={points}
