@@ -14,13 +14,14 @@ export async function signIn(page: Page, base: string, email: string, password: 
   await page.waitForURL((url) => url.pathname !== '/sign-in');
 }
 
-/** Opens a two-plane job from a machine's page address, every choice made by hand. */
-export async function openTwoPlaneJob(page: Page, address: string): Promise<void> {
-  await page.goto(address);
+/** Opens a job from a machine's page address, every choice made by hand: every plane, points read across. */
+export async function openJob(page: Page, address: string, kind: 'One plane' | 'Two planes') {
+  await page.goto(`${address}/new-balance-job`);
   await page.getByLabel(/I looked: mark, tacho and sensors/).check();
-  await page.getByLabel('Two planes').check();
+  await page.getByLabel(kind).check();
   for (const plane of await page.getByLabel(/^Plane /).all()) await plane.check();
-  for (const point of await page.getByLabel(/^[AB]-H/).all()) await point.check();
+  const points = page.getByLabel(kind === 'One plane' ? /^A-H/ : /^[AB]-H/);
+  for (const point of await points.all()) await point.check();
   await page.getByLabel('Why is it balanced?').fill('1x has grown into zone C');
   await page.getByLabel('mm/s rms').check();
   await page.getByLabel(/^lag/).check();
@@ -32,10 +33,16 @@ export async function openTwoPlaneJob(page: Page, address: string): Promise<void
 }
 
 /** Types one run: what is confirmed before the start, then size and phase of each point. */
-export async function typeRun(page: Page, button: string, readings: readonly Reading[]) {
+export async function typeRun(
+  page: Page,
+  button: string,
+  readings: readonly Reading[],
+  speedRpm?: number,
+) {
   const form = page.locator('form').filter({ has: page.getByRole('button', { name: button }) });
   await form.getByLabel('It is so.').check();
   await form.getByLabel('Seen to by (name)').fill(NAME);
+  if (speedRpm !== undefined) await form.getByLabel('Speed').fill(String(speedRpm));
   for (const [index, reading] of readings.entries()) {
     await form.locator(`[name="vectors.${index}.amplitude"]`).fill(String(reading.amp));
     await form.locator(`[name="vectors.${index}.phaseDeg"]`).fill(String(reading.deg));
@@ -65,4 +72,17 @@ export async function settleTrial(page: Page, answer: RegExp) {
   await page.getByLabel('It stands still and is locked out.').check();
   await page.getByLabel('Locked out by (name)').fill(NAME);
   await page.getByRole('button', { name: 'Record it' }).click();
+}
+
+/** Makes every weight permanent, hands the machine back, and signs. */
+export async function signJob(page: Page, why: string): Promise<void> {
+  const sign = page.getByRole('button', { name: 'Sign the job record' });
+  await sign.waitFor();
+  for (const permanent of await page.getByLabel(/is permanent/).all()) await permanent.check();
+  const form = page.locator('form').filter({ has: sign });
+  await form.getByLabel('It is so.').check();
+  await form.getByLabel(/Area owner/).fill('Rune Holt');
+  await form.getByLabel(/Why it is signed although/).fill(why);
+  await sign.click();
+  await sign.waitFor({ state: 'detached' });
 }
