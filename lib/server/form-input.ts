@@ -16,11 +16,12 @@ export function formToInput(form: FormData): unknown {
   return arraysWhereNumbered(root);
 }
 
-/** Every text of the form by its name, to show again after a failure. */
+/** Every text of the form by its name, to show again after a failure; a password is never sent back. */
 export function typedValues(form: FormData): Record<string, string> {
   const values: Record<string, string> = {};
   for (const [name, value] of form.entries()) {
-    if (typeof value === 'string' && !name.startsWith('$ACTION')) values[name] = value;
+    if (typeof value !== 'string' || name.startsWith('$ACTION') || name === 'password') continue;
+    values[name] = value;
   }
   return values;
 }

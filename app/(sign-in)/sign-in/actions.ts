@@ -9,7 +9,7 @@ import { sessionCookie } from '@/lib/server/session';
 import { signIn } from '@/lib/server/sign-in';
 
 export async function signInAction(_previous: ActionState, form: FormData): Promise<ActionState> {
-  const { password: _password, ...values } = typedValues(form);
+  const values = typedValues(form);
   const parsed = signInInput.safeParse(Object.fromEntries(form));
   if (!parsed.success) {
     const failures = parsed.error.issues.map(({ path, message }) => ({
