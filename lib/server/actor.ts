@@ -11,17 +11,21 @@ import { hashSessionKey, sessionCookie } from './session';
 /** Who is signed in, or null. Asked of the database once per request. */
 export const currentActor = cache(async (): Promise<Actor | null> => {
   const { key } = await sessionCookie();
-  if (!key) return null;
+  return key ? actorOfKey(key) : null;
+});
+
+/** Whom a session key opens the register for: nobody once the session or the account has ended. */
+export async function actorOfKey(key: string, now = new Date()): Promise<Actor | null> {
   const em = await getEntityManager();
   const session = await em.findOne(
     Session,
-    { keyHash: hashSessionKey(key), endedAt: null, expiresAt: { $gt: new Date() } },
+    { keyHash: hashSessionKey(key), endedAt: null, expiresAt: { $gt: now } },
     { populate: ['person'] },
   );
   const person = session?.person.$;
   if (person?.state !== 'active') return null;
   return actorOf(em, person);
-});
+}
 
 /** Who is signed in; sends everybody else to the sign-in page. */
 export async function requireActor(): Promise<Actor> {

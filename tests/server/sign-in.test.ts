@@ -3,6 +3,7 @@ import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { Person, Session } from '@/entities/person';
+import { actorOfKey } from '@/lib/server/actor';
 import { closeDatabase } from '@/lib/server/db';
 import { hashSessionKey } from '@/lib/server/session';
 import { endSession, signIn } from '@/lib/server/sign-in';
@@ -106,6 +107,47 @@ describe('guessing', () => {
     await person('other@example.test');
     await fail('victim@example.test', 5, START);
     expect(await signIn('other@example.test', PASSWORD, after(1))).toMatchObject({ ok: true });
+  });
+});
+
+async function openKey(email: string): Promise<string> {
+  const result = await signIn(email, PASSWORD, START);
+  if (!result.ok) throw new Error(result.failure.message);
+  return result.value.key;
+}
+
+describe('a session’s key', () => {
+  it('opens the register for its person, for twelve hours', async () => {
+    const personId = await person('keyed@example.test');
+    const key = await openKey('keyed@example.test');
+    expect(await actorOfKey(key, after(1))).toMatchObject({ personId, role: 'reader' });
+    expect(await actorOfKey(key, after(12 * 3600 - 1))).toMatchObject({ personId });
+    expect(await actorOfKey(key, after(12 * 3600))).toBeNull();
+  });
+
+  it('opens nothing after signing out, while another session of the person stays', async () => {
+    const personId = await person('twice@example.test');
+    const [here, there] = [
+      await openKey('twice@example.test'),
+      await openKey('twice@example.test'),
+    ];
+    await endSession(here, after(60));
+    expect(await actorOfKey(here, after(61))).toBeNull();
+    expect(await actorOfKey(there, after(61))).toMatchObject({ personId });
+  });
+
+  it('opens nothing for a closed account, though its session never ended', async () => {
+    const personId = await person('shut@example.test');
+    const key = await openKey('shut@example.test');
+    await em.nativeUpdate(Person, { id: personId }, { state: 'closed' });
+    expect(await actorOfKey(key, after(1))).toBeNull();
+  });
+
+  it('is neither its hash nor a made-up key', async () => {
+    await person('hashed@example.test');
+    const key = await openKey('hashed@example.test');
+    expect(await actorOfKey(hashSessionKey(key), after(1))).toBeNull();
+    expect(await actorOfKey('0'.repeat(64), after(1))).toBeNull();
   });
 });
 
