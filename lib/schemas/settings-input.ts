@@ -15,6 +15,15 @@ const password = z
     error: `Use at most ${String(PASSWORD_MAX_BYTES)} bytes: letters of plain English are one each.`,
   });
 
+const email = text('the e-mail address', 200)
+  .toLowerCase()
+  .pipe(
+    z.email({
+      error: ({ input }) =>
+        `“${String(input)}” is no e-mail address. Write one such as name@plant.example.`,
+    }),
+  );
+
 const identity = {
   name: text('the name', 120),
   role: z.enum(ROLES, { error: 'Choose a role.' }),
@@ -23,7 +32,7 @@ const identity = {
 
 export const createPersonInput = z.object({
   ...identity,
-  email: z.email({ error: 'Write an e-mail address, for example name@plant.example.' }).max(200),
+  email,
   password,
 });
 
@@ -96,6 +105,6 @@ function rising(context: z.RefinementCtx, field: string, low: Named, high: Named
 }
 
 export const retireLimitSetInput = z.object({
-  limitSetId: id,
+  limitSetId: z.coerce.number().int().positive('Choose a limit set.'),
   reason: text('why the limit set is retired', 400),
 });

@@ -25,7 +25,7 @@ export const createPerson = command(
     const person = em.create(Person, {
       name,
       role,
-      email: email.toLowerCase(),
+      email,
       passwordHash: await hash(password, ROUNDS),
       createdAt: now,
     });
@@ -33,7 +33,7 @@ export const createPerson = command(
     await em.flush();
     audit({
       ...aboutPerson(person.id, siteIds),
-      after: { name, role, email: person.email, siteIds },
+      after: { name, role, email, siteIds },
     });
     return ok({ personId: person.id });
   },
@@ -77,7 +77,8 @@ export const setPassword = command(
     if (!person) return notFound('person');
     person.passwordHash = await hash(password, ROUNDS);
     const sessionsEnded = await endSessions(context, personId);
-    context.audit({ ...aboutPerson(personId, context.siteIds), after: { sessionsEnded } });
+    const shared = await sharedSites(context, personId);
+    context.audit({ ...aboutPerson(personId, shared), after: { sessionsEnded } });
     return ok({ personId });
   },
 );
@@ -97,7 +98,7 @@ export const closePerson = command(
     person.state = 'closed';
     const sessionsEnded = await endSessions(context, personId);
     context.audit({
-      ...aboutPerson(personId, idsOf(access)),
+      ...aboutPerson(personId, await sharedSites(context, personId)),
       before: { state: 'active' },
       after: { state: 'closed', sessionsEnded },
       reason,
@@ -115,7 +116,7 @@ export const reopenPerson = command(
     if (person.state === 'active') return fail('already', 'This account is open.');
     person.state = 'active';
     context.audit({
-      ...aboutPerson(personId, context.siteIds),
+      ...aboutPerson(personId, await sharedSites(context, personId)),
       before: { state: 'closed' },
       after: { state: 'active' },
       reason,
@@ -126,6 +127,12 @@ export const reopenPerson = command(
 
 function aboutPerson(personId: number, siteIds: readonly number[]) {
   return { siteId: siteIds[0] ?? null, entity: 'Person', entityId: personId };
+}
+
+/** The sites of the person that the administrator sees: an audit row stands under the first. */
+async function sharedSites({ em, siteIds }: CommandContext, personId: number): Promise<number[]> {
+  const where = { person: personId, site: { $in: siteIds } };
+  return idsOf(await em.find(SiteAccess, where, { orderBy: { site: 'asc' } }));
 }
 
 function missingFrom(have: readonly number[], want: readonly number[]): number[] {

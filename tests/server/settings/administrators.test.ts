@@ -1,0 +1,169 @@
+import { setTimeout } from 'node:timers/promises';
+import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { AuditEvent } from '@/entities/audit-event';
+import { Person, SiteAccess } from '@/entities/person';
+import { Site } from '@/entities/site';
+import type { Role } from '@/lib/domain/access/permissions';
+import type { Actor } from '@/lib/schemas/actor';
+import { actorOf } from '@/lib/server/actor';
+import {
+  closePerson,
+  createPerson,
+  editPerson,
+  reopenPerson,
+  setPassword,
+} from '@/lib/server/commands/people';
+import { closeDatabase } from '@/lib/server/db';
+import config from '@/mikro-orm.config';
+import { freshDatabase } from '@/tests/support/fresh-database';
+import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+
+let orm: MikroORM;
+let em: EntityManager;
+let plant: SmallPlant;
+let drop: () => Promise<void>;
+let made = 0;
+
+beforeAll(async () => {
+  const database = await freshDatabase();
+  drop = database.close;
+  process.env.DATABASE_URL = database.url;
+  orm = await MikroORM.init({ ...config, clientUrl: database.url });
+  em = orm.em.fork();
+  plant = await seedSmallPlant(em);
+});
+
+afterAll(async () => {
+  await closeDatabase();
+  await orm.close(true);
+  await drop();
+});
+
+/** A site where nobody is yet. */
+async function newSite(): Promise<number> {
+  made += 1;
+  const site = em.create(Site, { name: `Site ${made}`, timeZone: 'Europe/Berlin' });
+  await em.flush();
+  return site.id;
+}
+
+/** A person with these sites, put there without a command. */
+async function person(role: Role, siteIds: readonly number[]): Promise<number> {
+  made += 1;
+  const one = em.create(Person, {
+    name: `Person ${made}`,
+    email: `person.${made}@example.test`,
+    passwordHash: 'no password',
+    role,
+    createdAt: new Date('2026-01-01T08:00:00Z'),
+  });
+  for (const site of siteIds) em.create(SiteAccess, { person: one, site });
+  await em.flush();
+  return one.id;
+}
+
+async function actor(personId: number): Promise<Actor> {
+  const fresh = em.fork();
+  return actorOf(fresh, await fresh.findOneOrFail(Person, personId));
+}
+
+const name = 'Somebody';
+const reason = 'Moved on';
+
+describe('the last administrator of a site', () => {
+  it('keeps the role, also for a site that the editor cannot see', async () => {
+    const siteIds = [plant.home.siteId];
+    const personId = await person('administrator', [plant.home.siteId, plant.away.siteId]);
+    const demote = () =>
+      editPerson(plant.at('administrator'), { personId, name, role: 'reader', siteIds });
+    const refused = await demote();
+    expect(refused).toMatchObject({ failure: { code: 'last-administrator', field: 'role' } });
+    expect(refused.ok ? '' : refused.failure.message).toContain('Millside');
+    await person('administrator', [plant.away.siteId]);
+    expect(await demote()).toMatchObject({ ok: true });
+  });
+
+  it('keeps the site, while one of several may leave it', async () => {
+    const [first, second] = [await newSite(), await newSite()];
+    const personId = await person('administrator', [first, second]);
+    const self = await actor(personId);
+    const leave = () =>
+      editPerson(self, { personId, name, role: 'administrator', siteIds: [second] });
+    expect(await leave()).toMatchObject({ failure: { code: 'last-administrator' } });
+    expect((await actor(personId)).sites.map(({ id }) => id)).toEqual([first, second]);
+    await person('administrator', [first]);
+    expect(await leave()).toMatchObject({ ok: true });
+    expect((await actor(personId)).sites.map(({ id }) => id)).toEqual([second]);
+  });
+
+  it('is not another whose account is closed', async () => {
+    const siteId = await newSite();
+    const [one, closed] = [
+      await person('administrator', [siteId]),
+      await person('administrator', [siteId]),
+    ];
+    const self = await actor(one);
+    const both = await actor(closed);
+    expect(await closePerson(self, { personId: closed, reason })).toMatchObject({ ok: true });
+    expect(await closePerson(both, { personId: one, reason })).toMatchObject({
+      failure: { code: 'last-administrator' },
+    });
+    expect(await reopenPerson(self, { personId: closed, reason })).toMatchObject({ ok: true });
+    expect(await closePerson(both, { personId: one, reason })).toMatchObject({ ok: true });
+  });
+
+  it('is one of two who close each other at the same moment', async () => {
+    const siteId = await newSite();
+    const [one, other] = [
+      await person('administrator', [siteId]),
+      await person('administrator', [siteId]),
+    ];
+    const asOther = await actor(other);
+    // The first closing as the command does it, held open while the second begins.
+    const first = em.fork();
+    await first.begin();
+    await first.execute('select id from site where id = ? for update', [siteId]);
+    await first.nativeUpdate(Person, { id: other }, { state: 'closed' });
+    const second = closePerson(asOther, { personId: one, reason });
+    await setTimeout(400);
+    await first.commit();
+    expect(await second).toMatchObject({ failure: { code: 'last-administrator' } });
+  });
+});
+
+describe('the audit of a person', () => {
+  it('stands under a site of that person, not under another of the administrator', async () => {
+    const [unrelated, shared] = [await newSite(), await newSite()];
+    const ruler = await actor(await person('administrator', [unrelated, shared]));
+    const created = await createPerson(ruler, {
+      name,
+      email: 'audited@example.test',
+      role: 'reader',
+      siteIds: [shared],
+      password: 'three plain words',
+    });
+    const personId = created.ok ? created.value.personId : 0;
+    await setPassword(ruler, { personId, password: 'three other words' });
+    await closePerson(ruler, { personId, reason });
+    await reopenPerson(ruler, { personId, reason });
+    const audits = await em.fork().find(AuditEvent, { entity: 'Person', entityId: personId });
+    expect(audits.map(({ action, site }) => [action, site?.id])).toEqual([
+      ['createPerson', shared],
+      ['setPassword', shared],
+      ['closePerson', shared],
+      ['reopenPerson', shared],
+    ]);
+  });
+
+  it('of somebody with several sites stands under one that the administrator sees', async () => {
+    const [hidden, shared] = [await newSite(), await newSite()];
+    const ruler = await actor(await person('administrator', [shared]));
+    const personId = await person('reader', [hidden, shared]);
+    expect(await closePerson(ruler, { personId, reason })).toMatchObject({ ok: true });
+    const audit = await em
+      .fork()
+      .findOneOrFail(AuditEvent, { action: 'closePerson', entityId: personId });
+    expect(audit.site?.id).toBe(shared);
+  });
+});
