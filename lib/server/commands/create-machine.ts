@@ -82,7 +82,10 @@ async function limitsOf(
     id: limitSetId,
     $or: [{ site: null }, { site: { $in: siteIds } }],
   });
-  return set ? ok(set) : fail('not-found', 'This limit set does not exist.', 'limitSetId');
+  if (!set) return fail('not-found', 'This limit set does not exist.', 'limitSetId');
+  if (set.state === 'in use') return ok(set);
+  const words = `The limit set “${set.title}, ${set.edition}” is retired. Choose one in use.`;
+  return fail('retired', words, 'limitSetId');
 }
 
 function addRotor({ em, now }: CommandContext, machine: Machine, input: Input): Result<null> {

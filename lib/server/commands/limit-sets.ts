@@ -40,7 +40,11 @@ export const retireLimitSet = command(
       return fail('shipped', 'This set comes with the register: choose another for your machines.');
     if (set.state === 'retired') return fail('already', 'This limit set is retired already.');
     set.state = 'retired';
-    const machinesUsing = await em.count(LimitUse, { limitSet: limitSetId, toAt: null });
+    const machinesUsing = await em.count(LimitUse, {
+      limitSet: limitSetId,
+      toAt: null,
+      machine: { state: 'active' },
+    });
     audit({
       siteId: site.id,
       entity: 'LimitSet',

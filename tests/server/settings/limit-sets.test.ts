@@ -1,13 +1,16 @@
 import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { LimitSet } from '@/entities/limit-set';
+import { Machine } from '@/entities/machine';
 import type { createLimitSetInput } from '@/lib/schemas/settings-input';
 import { chooseLimitSet } from '@/lib/server/commands/edit-machine';
+import { createMachine } from '@/lib/server/commands/create-machine';
 import { createLimitSet, retireLimitSet } from '@/lib/server/commands/limit-sets';
 import { closeDatabase } from '@/lib/server/db';
 import { limitSets } from '@/lib/server/queries/limit-sets';
 import { newMachineForm } from '@/lib/server/queries/machine-forms';
 import config from '@/mikro-orm.config';
+import { newMachine } from '@/tests/server/register/new-machine';
 import { freshDatabase } from '@/tests/support/fresh-database';
 import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
 import type { z } from 'zod';
@@ -124,9 +127,34 @@ describe('a limit set retired', () => {
     expect(
       await chooseLimitSet(plant.at('engineer'), { machineId, limitSetId, reason }),
     ).toMatchObject({ ok: false });
+    const late = await createMachine(
+      plant.at('engineer'),
+      newMachine(plant, { tag: 'KX-9', limitSetId }),
+    );
+    expect(late).toMatchObject({ failure: { code: 'retired', field: 'limitSetId' } });
     expect(
       await retireLimitSet(plant.at('engineer'), { limitSetId, reason: 'Again' }),
     ).toMatchObject({ failure: { code: 'already' } });
+  });
+
+  it('counts only machines that are not retired themselves', async () => {
+    const limitSetId = await enter();
+    const { machineId } = plant.home;
+    await chooseLimitSet(plant.at('engineer'), { machineId, limitSetId, reason: 'A trial' });
+    await em.nativeUpdate(Machine, { id: machineId }, { state: 'retired' });
+    const retired = await retireLimitSet(plant.at('engineer'), { limitSetId, reason: 'Over' });
+    await em.nativeUpdate(Machine, { id: machineId }, { state: 'active' });
+    expect(retired).toMatchObject({ value: { machinesUsing: 0 } });
+  });
+
+  it.each([
+    [{ limitSetId: '' }, 'limitSetId', 'Choose a limit set.'],
+    [{ reason: ' ' }, 'reason', 'Write why the limit set is retired.'],
+  ])('needs a set and a reason: %o', async (over, field, message) => {
+    const input = { limitSetId: plant.limitSetId, reason: 'Newer edition', ...over };
+    expect(await retireLimitSet(plant.at('engineer'), input)).toMatchObject({
+      failure: { field, message },
+    });
   });
 
   it('is never one that comes with the register', async () => {

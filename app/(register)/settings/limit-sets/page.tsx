@@ -16,7 +16,7 @@ export const metadata: Metadata = { title: 'Limit sets' };
 export default async function LimitSetsPage() {
   const actor = await requireActor();
   const { sets, sites } = await limitSets(actor, undefined);
-  const own = sets.filter(({ siteName, state }) => siteName !== null && state === 'in use');
+  const own = sets.filter(({ siteName }) => siteName !== null);
   const mayEdit = allows(actor.role, 'limitSet:edit');
   return (
     <>
@@ -33,7 +33,7 @@ export default async function LimitSetsPage() {
         <LimitSetTable sets={sets} decimalMark={actor.sites[0]?.decimalMark ?? '.'} />
       </Panel>
       {mayEdit && <NewLimitSetForm sites={sites} />}
-      {mayEdit && own.length > 0 && <RetireLimitSetForm sets={own} />}
+      {mayEdit && own.length > 0 && <RetireLimitSetForm own={own} />}
     </>
   );
 }
