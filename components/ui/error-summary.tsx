@@ -52,7 +52,11 @@ function FailureLine({ failure, onGo }: { failure: Failure; onGo: (name: string)
 
 function goToField(from: Element | null, name: string) {
   const within = from?.closest('form') ?? document;
-  const field = within.querySelector<HTMLElement>(`[name="${CSS.escape(name)}"]`);
+  const escaped = CSS.escape(name);
+  // A group of ticks has no field of the name itself: its first tick stands for it.
+  const field =
+    within.querySelector<HTMLElement>(`[name="${escaped}"]`) ??
+    within.querySelector<HTMLElement>(`[name^="${escaped}."]`);
   field?.focus();
   field?.scrollIntoView({ block: 'center' });
 }

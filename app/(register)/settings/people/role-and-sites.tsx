@@ -1,8 +1,10 @@
 'use client';
 
+import { useId } from 'react';
 import { CheckField } from '@/components/ui/check-field';
 import { errorOf } from '@/components/ui/field-state';
 import { Field } from '@/components/ui/field';
+import { FieldError } from '@/components/ui/field-frame';
 import { RadioField } from '@/components/ui/radio-field';
 import { ROLES, type Role } from '@/lib/domain/access/permissions';
 import { ROLE_NAMES } from '@/lib/format';
@@ -24,6 +26,7 @@ const MEANS: Readonly<Record<Role, string>> = {
 
 /** Name, role and sites: the same fields whether somebody is entered or edited. */
 export function RoleAndSites({ state, sites, given }: RoleAndSitesProps) {
+  const problemId = useId();
   const problem = errorOf(state, 'siteIds');
   return (
     <>
@@ -39,9 +42,11 @@ export function RoleAndSites({ state, sites, given }: RoleAndSitesProps) {
           hint: MEANS[role],
         }))}
       />
-      <fieldset>
+      <fieldset
+        aria-describedby={problem === undefined ? undefined : problemId}
+        className={problem === undefined ? '' : 'border-l-4 border-fault pl-3'}
+      >
         <legend className="text-sm font-semibold">Sites</legend>
-        {problem !== undefined && <p className="text-sm text-fault">{problem}</p>}
         {sites.map((site) => (
           <CheckField
             key={site.id}
@@ -53,6 +58,7 @@ export function RoleAndSites({ state, sites, given }: RoleAndSitesProps) {
             defaultChecked={given?.siteIds.includes(site.id)}
           />
         ))}
+        <FieldError id={problemId} error={problem} />
       </fieldset>
     </>
   );
