@@ -2,6 +2,7 @@ import { Notice } from '@/components/ui/notice';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import {
   formatDegrees,
+  formatExact,
   formatLag,
   formatMass,
   formatNumber,
@@ -129,7 +130,7 @@ const CONDITION_WORDS = {
 
 /** Nobody reads less than a hundredth: below it the number is only rounding. */
 function smallOr(amplitude: number, unit: string): string {
-  return amplitude < 0.01 ? `below ${formatQuantity(0.01, unit)}` : formatQuantity(amplitude, unit);
+  return amplitude < 0.01 ? `below ${formatExact(0.01, unit)}` : formatQuantity(amplitude, unit);
 }
 
 function uncertainty(grams: number | null, degrees: number | null): string {
