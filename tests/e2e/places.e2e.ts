@@ -164,6 +164,8 @@ describe('another site', () => {
       point,
       reading,
       routes.machine(999_999),
+      routes.machine(99_999_999_999),
+      routes.balanceJob(99_999_999_999),
       `${machine}/new-balance-job`,
     ];
     for (const address of missing) {

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
+import { cache } from 'react';
 import { Badge } from '@/components/ui/badge';
 import { LinkButton } from '@/components/ui/link-button';
 import { Notice } from '@/components/ui/notice';
@@ -9,6 +10,7 @@ import { allows } from '@/lib/domain/access/permissions';
 import { formatDateTime } from '@/lib/format';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
+import { idOf } from '@/lib/server/address-numbers';
 import { balanceJob } from '@/lib/server/queries/balance-job';
 import { Faces } from './faces';
 import { NextStep } from './next-step';
@@ -17,6 +19,9 @@ import { StopForm } from './stop-form';
 import { WeightsTable } from './weights-table';
 
 type Props = { params: Promise<{ jobId: string }> };
+
+/** Once per request: the title needs it too. */
+const foundOf = cache(async (jobId: number) => balanceJob(await requireActor(), jobId));
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const job = await load(params);
@@ -74,8 +79,7 @@ export default async function BalanceJobPage({ params }: Props) {
 }
 
 async function load(params: Props['params']) {
-  const jobId = Number((await params).jobId);
-  const job = Number.isInteger(jobId) ? await balanceJob(await requireActor(), jobId) : null;
-  if (!job) notFound();
-  return job;
+  const found = await foundOf(idOf((await params).jobId));
+  if (!found) notFound();
+  return found;
 }

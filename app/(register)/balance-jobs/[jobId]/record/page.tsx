@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
+import { cache } from 'react';
 import { AnswerCard } from '@/components/balancing/answer-card';
 import { Notice } from '@/components/ui/notice';
 import { PageHead } from '@/components/ui/page-head';
@@ -7,6 +8,7 @@ import { Panel } from '@/components/ui/panel';
 import { STANDING_SENTENCE } from '@/lib/domain/cautions';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
+import { idOf } from '@/lib/server/address-numbers';
 import { jobRecord } from '@/lib/server/queries/job-record';
 import { CheckTable } from '../check-table';
 import { Faces } from '../faces';
@@ -19,6 +21,9 @@ import { SignOffStrip } from './sign-off-strip';
 import { ToleranceTable } from './tolerance-table';
 
 type Props = { params: Promise<{ jobId: string }> };
+
+/** Once per request: the title needs it too. */
+const foundOf = cache(async (jobId: number) => jobRecord(await requireActor(), jobId));
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const { job } = await load(params);
@@ -81,8 +86,7 @@ export default async function JobRecordPage({ params }: Props) {
 }
 
 async function load(params: Props['params']) {
-  const jobId = Number((await params).jobId);
-  const record = Number.isInteger(jobId) ? await jobRecord(await requireActor(), jobId) : null;
-  if (!record) notFound();
-  return record;
+  const found = await foundOf(idOf((await params).jobId));
+  if (!found) notFound();
+  return found;
 }

@@ -7,6 +7,7 @@ import { PageHead } from '@/components/ui/page-head';
 import { allows } from '@/lib/domain/access/permissions';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
+import { idOf } from '@/lib/server/address-numbers';
 import { newBalanceJob } from '@/lib/server/queries/new-balance-job';
 import { OpenJobForm } from './open-job-form';
 
@@ -17,8 +18,7 @@ type Props = { params: Promise<{ machineId: string }> };
 export default async function NewBalanceJobPage({ params }: Props) {
   const actor = await requireActor();
   if (!allows(actor.role, 'balanceJob:open')) forbidden();
-  const machineId = Number((await params).machineId);
-  if (!Number.isInteger(machineId)) notFound();
+  const machineId = idOf((await params).machineId);
   const dto = await newBalanceJob(actor, machineId);
   if (!dto) notFound();
   const crumbs = [
