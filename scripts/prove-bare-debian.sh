@@ -99,13 +99,14 @@ step() {
 # Starts the product, waits until it answers, looks at the sign-in page, and stops it with the signal of Ctrl-C.
 start_once() {
   echo "== npm start, $1"
+  local begun=$SECONDS
   inside 'npm start' &
   local started=$!
   until curl -fs "http://127.0.0.1:$port/sign-in" >/dev/null; do
     kill -0 "$started" 2>/dev/null || { echo "== npm start ended early"; exit 1; }
     sleep 1
   done
-  echo "== the sign-in page answers"
+  echo "== the sign-in page answers after $((SECONDS - begun)) s"
   inside "kill -INT \$(sed 's/.*\"pid\":\\([0-9]*\\).*/\\1/' .data/start.lock)"
   wait "$started" || true
 }
