@@ -1,13 +1,14 @@
 import { Badge } from '@/components/ui/badge';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
-import { formatExact, formatNumber, type DecimalMark } from '@/lib/format';
+import { formatExact, type DecimalMark } from '@/lib/format';
 import type { LimitSetRow } from '@/lib/schemas/settings';
 
 type LimitSetTableProps = { sets: readonly LimitSetRow[]; decimalMark: DecimalMark };
 
 /** Every set with its boundaries, for what it holds, and where it comes from. */
 export function LimitSetTable({ sets, decimalMark }: LimitSetTableProps) {
-  const number = (value: number) => formatNumber(value, { significant: 3, decimalMark });
+  // As it was given: a rounded boundary would be another boundary.
+  const number = (value: number) => formatExact(value, '', decimalMark);
   return (
     <Table caption="Limit sets">
       <thead>
@@ -26,23 +27,25 @@ export function LimitSetTable({ sets, decimalMark }: LimitSetTableProps) {
         {sets.map((set) => (
           <tr key={set.id}>
             <RowHead>
-              {set.title}{' '}
-              <span className="font-normal text-ink-soft">
-                {set.edition}
-                {set.siteName !== null && `, ${set.siteName}`}
-              </span>{' '}
-              {set.state === 'retired' && <Badge>retired</Badge>}
+              <span className="block min-w-44">
+                {set.title}{' '}
+                <span className="font-normal text-ink-soft">
+                  {set.edition}
+                  {set.siteName !== null && `, ${set.siteName}`}
+                </span>{' '}
+                {set.state === 'retired' && <Badge>retired</Badge>}
+              </span>
             </RowHead>
             <Td numeric>{number(set.bAb)}</Td>
             <Td numeric>{number(set.bBc)}</Td>
             <Td numeric>{number(set.bCd)}</Td>
-            <Td>
+            <Td className="min-w-28">
               {set.unit}, {formatExact(set.bandLowHz, '', decimalMark)} to{' '}
               {formatExact(set.bandHighHz, 'Hz', decimalMark)}
             </Td>
-            <Td>{holdsFor(set, decimalMark)}</Td>
+            <Td className="min-w-40">{holdsFor(set, decimalMark)}</Td>
             <Td numeric>{set.machines}</Td>
-            <Td>{set.citation}</Td>
+            <Td className="min-w-64">{set.citation}</Td>
           </tr>
         ))}
       </tbody>

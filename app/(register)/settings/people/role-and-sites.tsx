@@ -19,9 +19,9 @@ type RoleAndSitesProps = {
 const MEANS: Readonly<Record<Role, string>> = {
   reader: 'sees everything of the sites, changes nothing',
   technician: 'uploads, decides on records, carries out and signs balance jobs',
-  engineer: 'and edits machines, set-ups and limit sets, and overrides with a reason',
+  engineer: 'as a technician; edits machines, set-ups and limit sets, overrides with a reason',
   planner: 'opens balance jobs, records events',
-  administrator: 'everything an engineer may, and people',
+  administrator: 'as an engineer; enters people and closes their accounts',
 };
 
 /** Name, role and sites: the same fields whether somebody is entered or edited. */
