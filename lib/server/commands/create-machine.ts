@@ -74,13 +74,13 @@ function identityOf(input: Input) {
 }
 
 async function limitsOf(
-  { em, siteIds }: CommandContext,
-  { limitSetId }: Input,
+  { em }: CommandContext,
+  { limitSetId, siteId }: Input,
 ): Promise<Result<LimitSet | null>> {
   if (limitSetId === null) return ok(null);
   const set = await em.findOne(LimitSet, {
     id: limitSetId,
-    $or: [{ site: null }, { site: { $in: siteIds } }],
+    $or: [{ site: null }, { site: siteId }],
   });
   if (!set) return fail('not-found', 'This limit set does not exist.', 'limitSetId');
   if (set.state === 'in use') return ok(set);

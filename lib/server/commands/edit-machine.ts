@@ -171,13 +171,13 @@ export const newSetup = command(
 export const chooseLimitSet = command(
   { name: 'chooseLimitSet', permission: 'register:edit', input: chooseLimitSetInput },
   async (context, { machineId, limitSetId, reason }) => {
-    const { em, siteIds, actor, now, audit } = context;
+    const { em, actor, now, audit } = context;
     const machine = await visibleMachine(context, machineId);
     if (!machine) return notFound('machine');
     const limitSet = await em.findOne(LimitSet, {
       id: limitSetId,
       state: 'in use',
-      $or: [{ site: null }, { site: { $in: siteIds } }],
+      $or: [{ site: null }, { site: machine.site.id }],
     });
     if (!limitSet) return notFound('limit set');
     const current = await em.findOne(LimitUse, { machine: machine.id, toAt: null });

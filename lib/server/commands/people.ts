@@ -43,16 +43,12 @@ export const createPerson = command(
 export const editPerson = command(
   { name: 'editPerson', permission: 'person:edit', input: editPersonInput },
   async (context, { personId, name, role, siteIds }) => {
-    const { em, audit, actor } = context;
+    const { em, audit } = context;
     const person = await visiblePerson(context, personId);
     if (!person) return notFound('person');
     if (missingFrom(context.siteIds, siteIds).length > 0) return notFound('site');
-    if (personId === actor.personId && role !== person.role)
-      return fail(
-        'own-account',
-        'You cannot change your own role: ask another administrator.',
-        'role',
-      );
+    const refused = await refusedIdentity(context, person, { name, role });
+    if (refused) return { ok: false, failure: refused };
     const access = await em.find(SiteAccess, { person: personId });
     const seen = access.filter(({ site }) => context.siteIds.includes(site.id));
     const before = { name: person.name, role: person.role, siteIds: idsOf(seen) };
@@ -75,6 +71,8 @@ export const setPassword = command(
   async (context, { personId, password }) => {
     const person = await visiblePerson(context, personId);
     if (!person) return notFound('person');
+    const elsewhere = await worksElsewhere(context, person);
+    if (elsewhere) return { ok: false, failure: elsewhere };
     person.passwordHash = await hash(password, ROUNDS);
     const sessionsEnded = await endSessions(context, personId);
     const shared = await sharedSites(context, personId);
@@ -92,6 +90,8 @@ export const closePerson = command(
     if (personId === context.actor.personId)
       return fail('own-account', 'You cannot close your own account: ask another administrator.');
     if (person.state === 'closed') return fail('already', 'This account is closed already.');
+    const elsewhere = await worksElsewhere(context, person);
+    if (elsewhere) return { ok: false, failure: elsewhere };
     const access = await context.em.find(SiteAccess, { person: personId });
     const lost = await lastAdministrator(context, person, idsOf(access));
     if (lost) return { ok: false, failure: lost };
@@ -114,6 +114,8 @@ export const reopenPerson = command(
     const person = await visiblePerson(context, personId);
     if (!person) return notFound('person');
     if (person.state === 'active') return fail('already', 'This account is open.');
+    const elsewhere = await worksElsewhere(context, person);
+    if (elsewhere) return { ok: false, failure: elsewhere };
     person.state = 'active';
     context.audit({
       ...aboutPerson(personId, await sharedSites(context, personId)),
@@ -124,6 +126,31 @@ export const reopenPerson = command(
     return ok({ personId });
   },
 );
+
+/** Why name and role cannot become these, if they cannot. */
+async function refusedIdentity(
+  context: CommandContext,
+  person: Person,
+  { name, role }: Pick<Person, 'name' | 'role'>,
+): Promise<Failure | null> {
+  if (name === person.name && role === person.role) return null;
+  if (person.id === context.actor.personId && role !== person.role) {
+    const message = 'You cannot change your own role: ask another administrator.';
+    return { code: 'own-account', message, field: 'role' };
+  }
+  return worksElsewhere(context, person);
+}
+
+/** The failure where the person has sites that the administrator does not: the account is not theirs alone. */
+async function worksElsewhere(
+  { em, siteIds }: CommandContext,
+  person: Person,
+): Promise<Failure | null> {
+  const elsewhere = await em.count(SiteAccess, { person: person.id, site: { $nin: siteIds } });
+  if (elsewhere === 0) return null;
+  const message = `${person.name} also works at sites that you do not administer: an administrator of all of them has to do this.`;
+  return { code: 'other-sites', message };
+}
 
 function aboutPerson(personId: number, siteIds: readonly number[]) {
   return { siteId: siteIds[0] ?? null, entity: 'Person', entityId: personId };

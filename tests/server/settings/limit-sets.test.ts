@@ -108,6 +108,21 @@ describe('a limit set entered', () => {
   });
 });
 
+describe('a limit set of one site', () => {
+  it('judges no machine of another, also for somebody with both sites', async () => {
+    const limitSetId = await enter();
+    const both = plant.at('engineer');
+    const everywhere = { ...both, sites: [...both.sites, ...plant.foreigner.sites] };
+    expect(
+      await chooseLimitSet(everywhere, {
+        machineId: plant.away.machineId,
+        limitSetId,
+        reason: 'x',
+      }),
+    ).toMatchObject({ failure: { code: 'not-found' } });
+  });
+});
+
 describe('a limit set retired', () => {
   it('leaves the choice and stays with the machines it judges', async () => {
     const limitSetId = await enter();

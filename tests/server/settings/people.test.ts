@@ -136,19 +136,36 @@ describe('a person entered', () => {
 
 describe('a person edited', () => {
   it('keeps the sites that the administrator cannot see', async () => {
-    const personId = await enter();
+    const personId = await enter({ name: 'Visitor' });
     await giveSite(personId, plant.away.siteId);
     const siteIds = [plant.home.siteId];
-    expect(
-      await editPerson(administrator(), { personId, name: 'Renamed', role: 'planner', siteIds }),
-    ).toMatchObject({ ok: true });
+    const edited = { personId, name: 'Visitor', role: 'technician' as const, siteIds };
+    expect(await editPerson(administrator(), edited)).toMatchObject({ ok: true });
     const actor = await actorFor(personId);
-    expect(actor).toMatchObject({ name: 'Renamed', role: 'planner' });
     expect(actor.sites.map(({ id }) => id).sort()).toEqual(
       [plant.home.siteId, plant.away.siteId].sort(),
     );
     const row = (await people(administrator(), undefined)).people.find(({ id }) => id === personId);
     expect(row).toMatchObject({ sites: [{ id: plant.home.siteId }], otherSites: 1 });
+  });
+
+  it('who also works at sites of others is theirs to change, close and give a password', async () => {
+    const personId = await enter({ name: 'Visitor' });
+    await giveSite(personId, plant.away.siteId);
+    const siteIds = [plant.home.siteId];
+    const reason = 'Left';
+    const tries = [
+      await editPerson(administrator(), { personId, name: 'Visitor', role: 'reader', siteIds }),
+      await editPerson(administrator(), { personId, name: 'Other', role: 'technician', siteIds }),
+      await setPassword(administrator(), { personId, password: PASSWORD }),
+      await closePerson(administrator(), { personId, reason }),
+    ];
+    for (const tried of tries) expect(tried).toMatchObject({ failure: { code: 'other-sites' } });
+    const both = { ...administrator(), sites: (await actorFor(personId)).sites };
+    expect(await closePerson(both, { personId, reason })).toMatchObject({ ok: true });
+    expect(await reopenPerson(administrator(), { personId, reason })).toMatchObject({
+      failure: { code: 'other-sites' },
+    });
   });
 
   it('does not change the administrator’s own role', async () => {
