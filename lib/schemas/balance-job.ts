@@ -1,5 +1,6 @@
 import type { Step } from '@/lib/domain/balance-job/next-step';
 import type { RepeatTest } from '@/lib/domain/balancing/repeat-test';
+import type { SlipTest } from '@/lib/domain/balancing/slip-tests';
 
 export type JobState =
   'opened' | 'base taken' | 'answered' | 'signed' | 'stopped safe' | 'not a balance job';
@@ -191,6 +192,9 @@ export type CheckVerdict = {
   }[];
 };
 
+/** One slip supposed, and how far the check run would be from what it makes expected. */
+export type SlipExplanation = Pick<SlipTest, 'slip' | 'words' | 'miss' | 'inside'>;
+
 export type TrialProposalDto = {
   planeId: number;
   massG: number;
@@ -239,6 +243,8 @@ export type BalanceJobDto = {
   answer: AnswerDto | null;
   answerFailure: string | null;
   check: CheckVerdict | null;
+  /** What may have gone wrong, best explanation first; empty where the check run was as predicted. */
+  slips: SlipExplanation[];
   tolerance: ToleranceDto | null;
   signOffs: {
     personName: string;

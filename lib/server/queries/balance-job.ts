@@ -14,6 +14,7 @@ import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob, type LoadedRun } from '../balance-job/load-job';
 import { planeDtos, pointDto, setupDto, weightDto, weightsOnRotor } from '../balance-job/places';
+import { slipExplanations } from '../balance-job/slip-explanations';
 import { toleranceDto, trialCheckDtos, trialProposal } from '../balance-job/solution-dto';
 import { query } from '../query';
 import { visibleJob } from '../scope';
@@ -29,10 +30,12 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
   const { job, points, weights } = loaded;
   const names = await namesOf(em, loaded);
   const rotorWeights = await weightsOnRotor(em, job.rotor.id);
+  const planes = await planeDtos(em, loaded.planes);
+  const check = checkVerdict(loaded);
   return {
     ...headOf(loaded, names),
     limits: await limitsOf(em, job.machine.id),
-    planes: await planeDtos(em, loaded.planes),
+    planes,
     points: points.map((point) => pointDto(point)),
     runs: loaded.runs.map((run) => runDto(run, names)),
     weights: weights.map((weight) => weightDto(weight)),
@@ -45,7 +48,8 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     trialProposal: trialProposal(loaded),
     ...arithmeticOf(loaded),
     accepted: acceptedOf(loaded, names),
-    check: checkVerdict(loaded),
+    check,
+    slips: slipExplanations(loaded, planes, check),
     signOffs: await signOffsOf(em, job.id),
   };
 }

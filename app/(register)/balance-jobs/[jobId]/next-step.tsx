@@ -10,6 +10,7 @@ import { CheckTable } from './check-table';
 import { RunForm } from './run-form';
 import { SettleForm } from './settle-form';
 import { SignForm } from './sign-form';
+import { SlipsPanel } from './slips-panel';
 import { WeightForm } from './weight-form';
 
 /** The one thing to do now. Everything else on the sheet is what was done. */
@@ -110,6 +111,7 @@ function Decide({ job }: { job: BalanceJobDto }) {
       <Panel title="Check run">
         <CheckTable job={job} />
       </Panel>
+      <SlipsPanel job={job} />
       <Panel title="Good enough? Sign the job record">
         <SignForm job={job} />
       </Panel>
