@@ -9,13 +9,12 @@ const TENS = Array.from({ length: 36 }, (_, i) => i * 10);
 type FaceDiscProps = {
   seen: Sense;
   positions: readonly NamedPosition[];
-  markLabel?: string;
   /** Rotor angles of the weights, whose own words say the degrees there. */
   weightDegs: readonly number[];
 };
 
 /** The disc of layout blue, its scribed lines, the ring of degrees and the mark on top. */
-export function FaceDisc({ seen, positions, markLabel, weightDegs }: FaceDiscProps) {
+export function FaceDisc({ seen, positions, weightDegs }: FaceDiscProps) {
   const named = positions.length <= 24;
   return (
     <g>
@@ -37,7 +36,7 @@ export function FaceDisc({ seen, positions, markLabel, weightDegs }: FaceDiscPro
       {positions.map((position) => (
         <Hole key={position.label} position={position} seen={seen} named={named} />
       ))}
-      <Mark label={markLabel} />
+      <Mark />
     </g>
   );
 }
@@ -103,7 +102,7 @@ function Hole({ position, seen, named }: HoleProps) {
   );
 }
 
-function Mark({ label }: { label?: string }) {
+function Mark() {
   const { x, y } = centre;
   const tip = y - rim - 2;
   return (
@@ -121,17 +120,6 @@ function Mark({ label }: { label?: string }) {
       >
         mark · 0°
       </text>
-      {label !== undefined && (
-        <text
-          x={x}
-          y={tip - 36}
-          textAnchor="middle"
-          className="fill-ink-soft text-[12px]"
-          {...HALO}
-        >
-          {label}
-        </text>
-      )}
     </>
   );
 }

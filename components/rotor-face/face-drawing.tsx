@@ -42,7 +42,6 @@ export function FaceDrawing({ plane, seenFrom, weights, readings, titleId }: Fac
       <FaceDisc
         seen={seen}
         positions={plane.positions ?? []}
-        markLabel={plane.markLabel}
         weightDegs={weights.map(({ angleDeg }) => angleDeg)}
       />
       {readings && <FaceVectors vectors={readings.vectors} {...{ seen, decimalMark }} />}

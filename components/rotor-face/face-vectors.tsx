@@ -1,6 +1,7 @@
 import { polarPlace, screenDeg, type Sense } from '@/lib/domain/drawing/face-view';
 import { spreadApart } from '@/lib/domain/drawing/leader-rows';
 import { formatNumber, type DecimalMark } from '@/lib/format';
+import { leftWithinDisc } from '@/lib/domain/drawing/within-disc';
 import { FACE } from './face-layout';
 import type { FaceVector } from './face-types';
 
@@ -65,20 +66,28 @@ export function FaceVectors({ vectors, seen, decimalMark }: FaceVectorsProps) {
 
 type VectorWordsProps = { vector: FaceVector; x: number; y: number; decimalMark?: DecimalMark };
 
-/** Beside the tip, on the side with more room, so that the words stay on the disc. */
+/** A letter of the figures' face at this size. */
+const LETTER = 7.3;
+/** Words stay this far inside the rim. */
+const MARGIN = 4;
+
+/** Beside the tip, on the side with more room, and always on the disc. */
 function VectorWords({ vector, x, y, decimalMark }: VectorWordsProps) {
-  const towardsLeft = x > centre.x + 8;
+  const { label, amplitude } = vector;
+  const decimals = amplitude < 1 ? 2 : undefined;
+  const words = `${label} ${formatNumber(amplitude, { decimals, decimalMark })}`;
+  const width = LETTER * words.length;
+  const left = x > centre.x + 8 ? x - 7 - width : x + 7;
   return (
     <text
-      x={x + (towardsLeft ? -7 : 7)}
+      x={leftWithinDisc({ left, width, y }, { ...centre, radius: rim - MARGIN })}
       y={y + 4}
-      textAnchor={towardsLeft ? 'end' : 'start'}
       className="figures fill-scribe text-[12px] font-bold"
       paintOrder="stroke"
       stroke="rgb(var(--disc))"
       strokeWidth={3}
     >
-      {vector.label} {formatNumber(vector.amplitude, { decimalMark })}
+      {words}
     </text>
   );
 }

@@ -45,7 +45,8 @@ export function RotorFace({
       <FaceDrawing {...{ plane, weights, readings, titleId }} seenFrom={end} />
       <figcaption className="mx-auto max-w-[26rem] print:max-w-[15cm]">
         <p className="mt-2 text-center text-xs text-ink-soft">
-          Degrees count against rotation from the mark.
+          Degrees count against rotation from the mark
+          {plane.markLabel && <>, which is: {plane.markLabel}</>}.
           {readings && ` Scribed on the disc: 1x at ${readings.point}, ${readings.unit}.`}
         </p>
         <div className="no-print mt-2 text-center">
