@@ -75,22 +75,24 @@ function WeightWords({ weight, row, decimalMark }: WeightWordsProps) {
   const left = row.side === 'left';
   const x = left ? WORDS_FROM_EDGE + 3 : FACE.width - WORDS_FROM_EDGE - 3;
   const y = rowMiddle(row.row) + 5;
-  const state = STATE_WORDS[weight.state];
   return (
     <text textAnchor={left ? 'start' : 'end'} {...HALO}>
       <tspan x={x} y={y} className="figures fill-ink text-[13px] font-bold">
         {formatMass(weight.massG, decimalMark)} at {formatDegrees(weight.angleDeg)}
       </tspan>
       <tspan x={x} y={y + 14} className="fill-ink-soft text-[12px]">
-        {shortened(weight.label === undefined ? state : `${state}, ${weight.label}`)}
+        {underWords(weight)}
       </tspan>
     </text>
   );
 }
 
-const LONGEST = 24;
+/** The longest row of words that leaves room for another beside it. */
+const LONGEST = 20;
+const SHORT_STATES = { on: 'on', trial: 'trial', proposed: 'proposed', removed: 'off' } as const;
 
-/** The whole of it stands in the list under the drawing. */
-function shortened(words: string): string {
+/** What it is, in few words; the whole of it stands in the list under the drawing. */
+function underWords({ state, label }: FaceWeight): string {
+  const words = label === undefined ? STATE_WORDS[state] : `${SHORT_STATES[state]}, ${label}`;
   return words.length <= LONGEST ? words : `${words.slice(0, LONGEST - 1)}…`;
 }

@@ -68,14 +68,18 @@ type TdProps = TdHTMLAttributes<HTMLTableCellElement> & { numeric?: boolean };
 
 /** A cell; numbers stand right, in figures. */
 export function Td({ numeric = false, className = '', ...rest }: TdProps) {
-  const look = numeric ? 'figures text-right whitespace-nowrap' : 'text-left';
+  // On a phone a table scrolls sideways: words then take a line or two, not a column of single words.
+  const look = numeric ? 'figures text-right whitespace-nowrap' : 'text-left max-sm:min-w-28';
   return <td {...rest} className={`border-b border-rule px-2 py-1 ${look} ${className}`} />;
 }
 
 /** The first cell of a row, its heading: usually the link to the thing. */
 export function RowHead({ children }: { children: ReactNode }) {
   return (
-    <th scope="row" className="border-b border-rule px-2 py-1 text-left font-semibold">
+    <th
+      scope="row"
+      className="border-b border-rule px-2 py-1 text-left font-semibold max-sm:min-w-20"
+    >
       {children}
     </th>
   );
