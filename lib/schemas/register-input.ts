@@ -76,17 +76,28 @@ const bearingInput = z.object({
   axial: tick,
 });
 
-const planeInput = z.object({
-  name: text('the name of the plane', 40),
-  radiusMm: typedNumber({ what: 'the radius of the plane', unit: 'mm', above: 0, max: 20_000 }),
-  fromAM: optionalNumber({ what: 'the place of the plane', unit: 'm', min: -100, max: 100 }),
-  maxGTotal: optionalNumber({ what: 'the most grams in the plane', unit: 'g', above: 0 }),
-  pieceG: optionalNumber({ what: 'the piece', unit: 'g', above: 0 }),
-  positions: optionalNumber({ what: 'the number of positions', min: 2, max: 360 }),
-  numbering: z.enum(['against', 'with']).default('against'),
-  firstDeg: optionalNumber({ what: 'the angle of position 1', unit: '°', min: 0, max: 360 }),
-  positionMaxG: optionalNumber({ what: 'the most grams on a position', unit: 'g', above: 0 }),
-});
+const planeInput = z
+  .object({
+    name: text('the name of the plane', 40),
+    radiusMm: typedNumber({ what: 'the radius of the plane', unit: 'mm', above: 0, max: 20_000 }),
+    fromAM: optionalNumber({ what: 'the place of the plane', unit: 'm', min: -100, max: 100 }),
+    maxGTotal: optionalNumber({ what: 'the most grams in the plane', unit: 'g', above: 0 }),
+    pieceG: optionalNumber({ what: 'the piece', unit: 'g', above: 0 }),
+    positions: optionalNumber({ what: 'the number of positions', min: 2, max: 360 }),
+    numbering: z.enum(['against', 'with', '']).default(''),
+    firstDeg: optionalNumber({ what: 'the angle of position 1', unit: '°', min: 0, max: 360 }),
+    positionMaxG: optionalNumber({ what: 'the most grams on a position', unit: 'g', above: 0 }),
+  })
+  .superRefine(({ positions, numbering, firstDeg }, context) => {
+    if (positions === null) return;
+    const missing = (field: string, message: string) => {
+      context.addIssue({ code: 'custom', path: [field], message });
+    };
+    if (numbering === '')
+      missing('numbering', 'Say which way the positions are numbered: against or with rotation.');
+    if (firstDeg === null)
+      missing('firstDeg', 'Write where position 1 is, in degrees from the mark.');
+  });
 
 export const createMachineInput = z
   .object({

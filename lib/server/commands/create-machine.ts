@@ -126,17 +126,9 @@ function addPlane(
     pieceG: input.pieceG,
     kind: input.positions === null ? 'free' : 'fixed positions',
   });
-  const ring = {
-    count: input.positions ?? 0,
-    firstDeg: input.firstDeg ?? 0,
-    numbered: input.numbering,
-  };
-  const angles: number[] = [];
-  for (let position = 1; position <= ring.count; position++) {
-    const angle = angleOfPosition(position, ring);
-    if (!angle.ok) return angle;
-    angles.push(angle.value);
-  }
+  const placed = positionAngles(input);
+  if (!placed.ok) return placed;
+  const angles = placed.value;
   const apart = checkPositions(angles);
   if (!apart.ok) return apart;
   for (const [index, angleDeg] of angles.entries()) {
@@ -149,6 +141,20 @@ function addPlane(
     });
   }
   return ok(null);
+}
+
+/** Rotor angles of the fixed positions; none on a free rim. */
+function positionAngles(input: Input['planes'][number]): Result<number[]> {
+  const { positions: count, firstDeg, numbering: numbered } = input;
+  // The input's schema has asked for all three where there are positions.
+  if (count === null || firstDeg === null || numbered === '') return ok([]);
+  const angles: number[] = [];
+  for (let position = 1; position <= count; position++) {
+    const angle = angleOfPosition(position, { count, firstDeg, numbered });
+    if (!angle.ok) return angle;
+    angles.push(angle.value);
+  }
+  return ok(angles);
 }
 
 const DIRECTIONS = [

@@ -99,6 +99,21 @@ describe('a machine entered', () => {
     expect((await findMachines(engineer(), 'PO-1')).machines).toEqual([]);
   });
 
+  it('assumes nothing about fixed positions: neither their sense nor where the first is', async () => {
+    const [plane] = newMachine(plant).planes ?? [];
+    if (!plane) throw new Error('the usual machine has a plane');
+    for (const [over, field] of [
+      [{ numbering: '' as const }, 'planes.0.numbering'],
+      [{ numbering: undefined }, 'planes.0.numbering'],
+      [{ firstDeg: '' }, 'planes.0.firstDeg'],
+    ] as const)
+      expect(await create({ tag: 'PN-1', planes: [{ ...plane, ...over }] })).toMatchObject({
+        failure: { field },
+      });
+    const free = { ...plane, positions: '', numbering: '' as const, firstDeg: '' };
+    expect(await create({ tag: 'PN-1', planes: [free] })).toMatchObject({ ok: true });
+  });
+
   it('cannot be entered by a technician', async () => {
     expect(
       await createMachine(plant.at('technician'), newMachine(plant, { tag: 'T-1' })),

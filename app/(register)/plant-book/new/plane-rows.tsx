@@ -58,6 +58,7 @@ function PlaneRow({ index, state }: { index: number; state: ActionState }) {
       <SelectField
         name={at('numbering')}
         label="Numbered"
+        placeholder="where positions are fixed"
         state={state}
         options={[
           { value: 'against', label: 'against rotation' },
