@@ -65,7 +65,7 @@ async function serve({ port, development, settings, lock, interrupted }) {
     quiet: !development,
     onStart: (child) => {
       interrupted.server = child;
-      lock.note({ address, server: child.pid });
+      lock.note({ address });
     },
   });
   if (server.ready) announce(address);

@@ -22,10 +22,14 @@ export function Caution({ code, children, tick, name }: CautionProps) {
             <path d="M10 1 19 17H1Z" fill="none" stroke="currentColor" strokeWidth="1.8" />
             <path d="M10 6.5v5M10 13.2v1.8" stroke="currentColor" strokeWidth="1.8" />
           </svg>
-          <div className="text-base font-semibold max-sm:text-lg">{children}</div>
-          {code !== undefined && (
-            <span className="figures ml-auto text-xs whitespace-nowrap text-ink-soft">{code}</span>
-          )}
+          <div className="min-w-0 grow">
+            {code !== undefined && (
+              <span className="figures float-right ml-3 text-xs whitespace-nowrap text-ink-soft max-sm:float-none max-sm:ml-0 max-sm:block">
+                {code}
+              </span>
+            )}
+            <div className="text-base font-semibold">{children}</div>
+          </div>
         </div>
         {tick}
         {name}

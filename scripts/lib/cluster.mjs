@@ -67,7 +67,7 @@ async function start(cluster, attempt = 1) {
   const { code, output } = await run(
     `${cluster.programs}/pg_ctl`,
     ['-D', cluster.data, '-l', log, '-w', '-t', '120', '-o', settings(port, cluster.fast), 'start'],
-    { cwd: '/', ...cluster.owner },
+    { cwd: '/', outlives: true, ...cluster.owner },
   );
   if (code === 0) return port;
   const said = existsSync(log) ? readFileSync(log, 'utf8') : output;

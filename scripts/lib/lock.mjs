@@ -1,24 +1,29 @@
 import { linkSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { DATA } from './places.mjs';
-import { beganAt, isAlive, pause } from './processes.mjs';
+import { beganAt, endMarked, isAlive, pause } from './processes.mjs';
+import { RUN } from './run.mjs';
 
 /**
  * Takes a lock of this project, kept as a file with the holder's process in it. Hands back `{ note, free }`,
- * or `{ holder }` where a living process has it. A lock whose process has gone is taken over.
+ * or `{ holder }` where a living process has it. A lock whose process was killed is taken over, once all that
+ * the killed one left working (a build, an install, a web server) has been ended.
  */
-export function takeLock(name, facts = {}) {
+export async function takeLock(name) {
   mkdirSync(DATA, { recursive: true });
+  process.env[RUN] ??= `${process.pid}-${beganAt(process.pid)}`;
   const file = `${DATA}/${name}.lock`;
   const mine = `${file}.${process.pid}`;
   const content = (more) =>
-    JSON.stringify({ pid: process.pid, began: beganAt(process.pid), ...facts, ...more });
+    JSON.stringify({ pid: process.pid, began: beganAt(process.pid), ...more });
   writeFileSync(mine, content({}));
   try {
     for (;;) {
       if (linked(mine, file)) break;
       const holder = readLock(name);
       if (holder && lives(holder)) return { holder };
-      rmSync(file, { force: true });
+      if (holder) await endMarked(RUN, `${holder.pid}-${holder.began}`);
+      // Somebody else may have taken it over meanwhile.
+      if (readLock(name)?.pid === holder?.pid) rmSync(file, { force: true });
     }
   } finally {
     rmSync(mine, { force: true });
@@ -33,7 +38,7 @@ export function takeLock(name, facts = {}) {
 /** Takes a lock, waiting until whoever has it is done. */
 export async function waitForLock(name) {
   for (;;) {
-    const lock = takeLock(name);
+    const lock = await takeLock(name);
     if (lock.free) return lock;
     await pause(500);
   }

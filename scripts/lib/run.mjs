@@ -1,12 +1,19 @@
 import { spawn } from 'node:child_process';
 
+/** The variable that names, in the environment of all it starts, the run that started it. */
+export const RUN = 'EVENRUN_RUN';
+
 const living = new Set();
 
-/** Runs a program to its end and hands back `{ code, output }`, both streams together. */
-export function run(program, args, { input, ...options } = {}) {
+/**
+ * Runs a program to its end and hands back `{ code, output }`, both streams together. One that `outlives` this run
+ * does not count as left behind by it.
+ */
+export function run(program, args, { input, outlives = false, ...options } = {}) {
   return new Promise((resolve, reject) => {
     const stdin = input === undefined ? 'ignore' : 'pipe';
-    const child = spawn(program, args, { stdio: [stdin, 'pipe', 'pipe'], ...options });
+    const env = { ...(options.env ?? process.env), ...(outlives ? { [RUN]: undefined } : {}) };
+    const child = spawn(program, args, { stdio: [stdin, 'pipe', 'pipe'], ...options, env });
     living.add(child);
     let output = '';
     for (const stream of [child.stdout, child.stderr]) {

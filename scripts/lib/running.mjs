@@ -1,20 +1,14 @@
 import { lives, readLock, takeLock } from './lock.mjs';
-import { ROOT } from './places.mjs';
 import { portTrouble } from './ports.mjs';
-import { endProcess, worksIn } from './processes.mjs';
+import { endProcess } from './processes.mjs';
 import { Stop } from './say.mjs';
 
 const LOCK = 'start';
 
 /** Makes this process the one that runs the product from this folder. */
 export async function becomeTheOne() {
-  const before = readLock(LOCK);
-  const lock = takeLock(LOCK);
-  if (lock.free) {
-    // The web server of a start that was killed lives on, holding the port.
-    if (before && worksIn(before.server, ROOT)) await endProcess(before.server);
-    return lock;
-  }
+  const lock = await takeLock(LOCK);
+  if (lock.free) return lock;
   const { pid, address } = lock.holder;
   throw new Stop(
     address
@@ -23,10 +17,17 @@ export async function becomeTheOne() {
   );
 }
 
-/** The start that runs from this folder, or null. */
-export function theOneRunning() {
+/** Ends the start that runs from this folder, and what a killed one left; hands back what it wrote, or null. */
+export async function endTheOne() {
   const holder = readLock(LOCK);
-  return holder && lives(holder) ? holder : null;
+  if (holder && lives(holder)) await endProcess(holder.pid);
+  const lock = await takeLock(LOCK);
+  if (!lock.free)
+    throw new Stop(
+      `Evenrun (process ${lock.holder.pid}) could not be ended: another user started it. Run “npm run stop” as that user or as root.`,
+    );
+  lock.free();
+  return holder;
 }
 
 /** Says in words why the web server could not listen on a port. */

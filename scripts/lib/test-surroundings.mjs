@@ -12,7 +12,7 @@ import { startTestCluster } from './test-cluster.mjs';
  */
 export async function testSurroundings(needsDatabase) {
   mkdirSync(DATA, { recursive: true });
-  const lock = takeLock('test');
+  const lock = await takeLock('test');
   if (!lock.free)
     throw new Stop(
       `Another npm test runs in this folder (process ${lock.holder.pid}). Wait until it has ended, then run the command again.`,
