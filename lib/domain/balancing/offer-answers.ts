@@ -9,13 +9,15 @@ import type { TrialCheck } from './trial-checks';
 const HEARD_ABOVE_SCATTER = 3;
 /** From here the planes are one and the same to the points. */
 const INDISTINGUISHABLE = 1e4;
+/** A change below this share of the reading is only rounding of the arithmetic. */
+const ROUNDING = 1e-9;
 
 /** The part of a solution that may be fitted. */
 export type Offer = Pick<JobSolution, 'answer' | 'alternatives' | 'withheld'>;
 
 /**
  * What may be fitted: nothing where a trial was not heard (change/noise < 5) or the readings are below 3
- * times their scatter; an equal weight in each plane where the scaled condition number is above 15;
+ * times their scatter, and a failure where a trial changed nothing at all; an equal weight in each plane where the scaled condition number is above 15;
  * otherwise the exact or least-squares answer with min-max and static pair beside it.
  * Source: limits from practice. Example: S09 → static pair, exact answer withheld.
  */
@@ -27,6 +29,8 @@ export function offerAnswers(
   const refused = unheardTrial(input, learned.trials) ?? unheardNow(task);
   if (refused)
     return ok({ answer: null, alternatives: [], withheld: { failure: refused, answer: null } });
+  const silent = silentTrial(task, learned.trials);
+  if (silent) return { ok: false, failure: silent };
   const kind = input.points.length === input.planes.length ? 'exact' : 'least squares';
   const full = buildAnswer(task, kind);
   if (!full.ok) return full;
@@ -69,6 +73,22 @@ function unheardTrial(input: JobInput, trials: readonly TrialCheck[]): Failure |
       'trial-too-small',
       `The trial weight in plane ${plane.name} changed the reading by ${(first.changeOverNoise ?? 0).toFixed(2)} times the noise, and less than 5 times cannot be told from scatter. ` +
         'Fit a heavier trial weight within the force cap, or average longer.',
+    ).failure;
+  }
+  return null;
+}
+
+/** Dividing by a change of nothing gives tons: with two planes the arithmetic alone does not notice. */
+function silentTrial({ input, basis }: AnswerTask, trials: readonly TrialCheck[]): Failure | null {
+  const largest = Math.max(0, ...basis.model.asFound.map(({ amplitude }) => amplitude));
+  const changed = ({ points }: TrialCheck) =>
+    points.some(({ changeAmplitude }) => changeAmplitude > ROUNDING * largest);
+  for (const plane of input.planes) {
+    const own = trials.filter(({ planeIds }) => planeIds.includes(plane.id));
+    if (own.length === 0 || own.some(changed)) continue;
+    return fail(
+      'no-response',
+      `The trial weight in plane ${plane.name} changed nothing at any point, so no answer can be computed. Check that it was fitted, that the run was read anew and that the sensors work.`,
     ).failure;
   }
   return null;

@@ -83,6 +83,28 @@ describe('runs that cannot be solved are refused in words', () => {
     expect(refusal(input).code).toBe('no-response');
   });
 
+  it.each([
+    ['the second', after, base, 'plane P2'],
+    ['the first', base, after, 'plane P1'],
+  ])('%s trial of two changed nothing: no weight of tons, in words', (_, one, two, named) => {
+    const { code, message } = refusal(
+      twoPlanes({ readings: one, weights: [on(1)] }, { readings: two, weights: [on(2)] }),
+    );
+    expect(code).toBe('no-response');
+    expect(message).toContain(named);
+  });
+
+  it('a second trial that changed nothing beside the first, which stayed on', () => {
+    const { code, message } = refusal(
+      twoPlanes(
+        { readings: after, weights: [on(1)] },
+        { readings: after, weights: [on(1), on(2)] },
+      ),
+    );
+    expect(code).toBe('no-response');
+    expect(message).toContain('plane P2');
+  });
+
   it('no run at all', () => {
     expect(explainRank([], ['P1'])?.code).toBe('no-runs');
     expect(refusal(job([300], 1, [])).code).toBe('no-runs');
