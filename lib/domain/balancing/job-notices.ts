@@ -63,6 +63,15 @@ function trialNotices(input: JobInput, { trials }: Known): JobNotice[] {
             },
           ]
         : [];
+    const weak: JobNotice[] =
+      verdict === 'unknown' && !points.some(({ thirtyRule }) => thirtyRule)
+        ? [
+            {
+              code: 'trial-weak',
+              message: `The weight of ${name} moved no reading by 30 % in size or 30° in phase, and the scatter is not known: this answer may be noise. Repeat the base run to learn the scatter, or fit a heavier trial weight.`,
+            },
+          ]
+        : [];
     const large: JobNotice[] = points.some(({ changePct }) => changePct > LARGE_CHANGE_PCT)
       ? [
           {
@@ -71,7 +80,7 @@ function trialNotices(input: JobInput, { trials }: Known): JobNotice[] {
           },
         ]
       : [];
-    return [...wide, ...large];
+    return [...wide, ...weak, ...large];
   });
 }
 

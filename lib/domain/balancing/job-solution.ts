@@ -45,6 +45,7 @@ export type JobNotice = {
     | 'no-repeats'
     | 'repeats-scatter'
     | 'trial-wide'
+    | 'trial-weak'
     | 'trial-large'
     | 'condition'
     | 'opposing-weights'

@@ -48,6 +48,23 @@ describe('notices beside an answer', () => {
     expect(words).toContain('run 3');
   });
 
+  // The trade's rule: 30 % in size or 30° in phase; at the limit it is met.
+  it.each([
+    [{ amp: 4 * 1.29, deg: 20 }, true],
+    [{ amp: 4, deg: 49 }, true],
+    [{ amp: 4 * 1.3, deg: 20 }, false],
+    [{ amp: 4, deg: 50 }, false],
+  ])('say of one base run and a trial of %o whether it may be noise: %s', (reading, said) => {
+    const runs = [quiet[0]!, run(3, 'trial', [reading], [trial])];
+    expect(codes(jobWith(runs)).includes('trial-weak')).toBe(said);
+  });
+
+  it('speak of noise only where the scatter is not known', () => {
+    const runs = [quiet[0]!, run(3, 'trial', [{ amp: 4.5, deg: 20 }], [trial])];
+    expect(wordsOf(jobWith(runs), 'trial-weak')).toContain('The weight of run 3 moved no reading');
+    expect(codes(jobWith(runs, { scatter: 0.02 }))).not.toContain('trial-weak');
+  });
+
   it('say that a trial changed more than twice the reading', () => {
     const loud = run(3, 'trial', [{ amp: 13, deg: 20 }], [trial]);
     expect(codes(jobWith([quiet[0]!, quiet[1]!, loud]))).toContain('trial-large');
