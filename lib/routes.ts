@@ -31,6 +31,8 @@ export const routes = {
     spectrum: (recordId: number, query = '') =>
       `/api/internal/readings/${recordId}/spectrum${query}`,
     uploadPreview: (uploadId: number) => `/api/internal/uploads/${uploadId}/preview`,
+    compute: (name: string) => `/api/v1/compute/${name}`,
+    openApi: () => '/api/v1/openapi',
     file: (uploadId: number) => `/api/internal/uploads/${uploadId}/file`,
   },
 } as const;

@@ -19,12 +19,12 @@ const rotation = choice(
   'Say which way the rotor turns, seen from the drive end.',
 );
 
-const reading = z.object({
+const reading = z.strictObject({
   amplitude: typedNumber({ what: 'the 1x size', min: 0, max: 1e6 }),
   phaseDeg: degrees('the phase'),
 });
 
-const trial = z.object({
+const trial = z.strictObject({
   massG: typedNumber({ what: 'the trial weight', unit: 'g', above: 0, max: 1e6 }),
   radiusMm: typedNumber({ what: 'its radius', unit: 'mm', above: 0, max: 20_000 }),
   angleDeg: degrees('the angle of the trial weight'),
@@ -35,7 +35,7 @@ const trial = z.object({
   readings: z.array(reading),
 });
 
-const plane = z.object({
+const plane = z.strictObject({
   radiusMm: typedNumber({
     what: 'the radius of the correction',
     unit: 'mm',
@@ -46,7 +46,7 @@ const plane = z.object({
 
 /** Runs typed on one page: base, then one trial a plane. */
 export const typedRunsInput = z
-  .object({
+  .strictObject({
     unit: choice(['mm/s rms', 'µm p-p'], 'Choose what the 1x sizes are read in.'),
     phaseSense: choice(
       ['lag', 'lead'],
@@ -71,7 +71,7 @@ export const typedRunsInput = z
   });
 
 export const toleranceInput = z
-  .object({
+  .strictObject({
     gradeMmS: typedNumber({ what: 'the balance quality grade G', unit: 'mm/s', above: 0 }),
     massKg: typedNumber({ what: 'the rotor mass', unit: 'kg', above: 0 }),
     speedRpm: typedNumber({ what: 'the highest service speed', unit: 'r/min', above: 0 }),
@@ -95,7 +95,7 @@ export const toleranceInput = z
       missing('apartM', 'To judge a residual at a bearing, write where the bearings are.');
   });
 
-export const splitInput = z.object({
+export const splitInput = z.strictObject({
   massG: typedNumber({ what: 'the weight', unit: 'g', above: 0, max: 1e6 }),
   angleDeg: degrees('the angle of the weight'),
   radiusMm: typedNumber({ what: 'the radius', unit: 'mm', above: 0, max: 20_000 }),

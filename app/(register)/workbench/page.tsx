@@ -24,6 +24,11 @@ export default async function WorkbenchPage({ searchParams }: Props) {
       <PageHead
         title="Workbench"
         note="The computations on their own. Nothing is saved: what hangs on a rotor belongs into a balance job."
+        actions={
+          <a className="link" href={routes.api.openApi()}>
+            The same for programs (OpenAPI)
+          </a>
+        }
       />
       <Tabs
         label="Computations"

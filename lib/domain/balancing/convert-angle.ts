@@ -26,6 +26,14 @@ export function rotorDegFromWithRotation(withRotationDeg: number): RotorDeg {
 }
 
 /**
+ * A rotor angle as it reads for a person who counts in `sense`: `360 − a` with rotation, itself against.
+ * Source: definition. Example: 285° reads as 75° with rotation.
+ */
+export function countedInSense(angleDeg: number, sense: 'against' | 'with'): number {
+  return normaliseDeg(sense === 'with' ? -angleDeg : angleDeg);
+}
+
+/**
  * Position k of N equally spaced ones: `a₁ ± (k − 1)·360/N`, plus where numbers run against rotation.
  *
  * @param position k, 1 to `count`
