@@ -21,6 +21,7 @@ export const routes = {
   settings: () => '/settings',
   people: () => '/settings/people',
   person: (personId: number) => `/settings/people/${personId}`,
+  ownPassword: () => '/settings/password',
   limitSets: () => '/settings/limit-sets',
   styleSheet: () => '/settings/style-sheet',
   api: {

@@ -40,6 +40,13 @@ export const editPersonInput = z.object({ personId: id, ...identity });
 
 export const setPasswordInput = z.object({ personId: id, password });
 
+export const changePasswordInput = z.object({
+  currentPassword: z
+    .string({ error: 'Write your password of now.' })
+    .min(1, 'Write your password of now.'),
+  password,
+});
+
 export const closePersonInput = z.object({
   personId: id,
   reason: text('why the account is closed', 400),

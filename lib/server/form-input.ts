@@ -20,7 +20,8 @@ export function formToInput(form: FormData): unknown {
 export function typedValues(form: FormData): Record<string, string> {
   const values: Record<string, string> = {};
   for (const [name, value] of form.entries()) {
-    if (typeof value !== 'string' || name.startsWith('$ACTION') || name === 'password') continue;
+    if (typeof value !== 'string' || name.startsWith('$ACTION') || /password$/i.test(name))
+      continue;
     values[name] = value;
   }
   return values;

@@ -21,6 +21,12 @@ const SECTIONS: readonly { label: string; href: string; says: string; needs: Per
     needs: 'limitSet:read',
   },
   {
+    label: 'Your password',
+    href: routes.ownPassword(),
+    says: 'Change it; every session of yours ends and you sign in again.',
+    needs: 'password:change',
+  },
+  {
     label: 'Style sheet',
     href: routes.styleSheet(),
     says: 'Every part of the screen in every state, with invented data.',

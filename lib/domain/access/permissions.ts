@@ -32,6 +32,7 @@ export const PERMISSIONS = {
   'person:edit': ['administrator'],
   'site:edit': ['administrator'],
   'session:end': EVERYONE,
+  'password:change': EVERYONE,
 } as const satisfies Record<string, readonly Role[]>;
 
 /** A thing somebody may be allowed to do. */

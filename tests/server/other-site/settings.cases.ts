@@ -1,7 +1,9 @@
+import { hash } from 'bcryptjs';
 import { Person } from '@/entities/person';
 import { LimitSet } from '@/entities/limit-set';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Actor } from '@/lib/schemas/actor';
+import { changePassword } from '@/lib/server/commands/change-password';
 import { createLimitSet, retireLimitSet } from '@/lib/server/commands/limit-sets';
 import {
   closePerson,
@@ -122,6 +124,22 @@ export const cases: OtherSiteCase[] = [
       const { sets } = await limitSets(foreigner, undefined);
       if (!sets.some(({ id }) => id === plant.limitSetId)) throw new Error('no shipped set seen');
       return sets.filter(({ id }) => id === homeId);
+    },
+  },
+  {
+    name: 'changePassword',
+    expects: 'empty',
+    run: async (foreigner, plant, em) => {
+      const passwordHash = await hash('the password of now', 4);
+      await em.nativeUpdate(Person, { id: foreigner.personId }, { passwordHash });
+      const before = await em.fork().find(Person, { email: { $like: '%.home@example.test' } });
+      const input = { currentPassword: 'the password of now', password: 'three plain words' };
+      const changed = await changePassword(foreigner, input);
+      if (!changed.ok) throw new Error(changed.failure.message);
+      const after = await em.fork().find(Person, { email: { $like: '%.home@example.test' } });
+      return after.filter(
+        ({ id, passwordHash: now }) => before.find((one) => one.id === id)?.passwordHash !== now,
+      );
     },
   },
 ];
