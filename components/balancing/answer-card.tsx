@@ -1,5 +1,6 @@
 import { Notice } from '@/components/ui/notice';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
+import { countedInSense } from '@/lib/domain/balancing/convert-angle';
 import {
   formatDegrees,
   formatExact,
@@ -19,13 +20,14 @@ export type AnswerGround = {
   readonly planes: readonly (PlacePlane & { readonly id: number })[];
   readonly points: readonly Pick<PointDto, 'id' | 'label'>[];
   readonly setup: PlaceSetup;
+  /** How the people at the machine count degrees; what is stored counts against rotation. */
+  readonly angleSense: 'against' | 'with';
 };
 
 type AnswerCardProps = { job: AnswerGround; answer: AnswerDto };
 
 /** Where the weight belongs: plane, grams, place in several ways, force, and what to expect after. */
 export function AnswerCard({ job, answer }: AnswerCardProps) {
-  const mark = job.site.decimalMark;
   return (
     <div className="flex flex-col gap-4">
       {answer.warnings.map((warning) => (
@@ -33,39 +35,7 @@ export function AnswerCard({ job, answer }: AnswerCardProps) {
           {warning}
         </Notice>
       ))}
-      <Table caption="Add to what is on the rotor now" captionShown roomy>
-        <thead>
-          <tr>
-            <Th>plane</Th>
-            <Th numeric>add</Th>
-            <Th numeric>at, against rotation</Th>
-            <Th numeric>radius</Th>
-            <Th numeric>force</Th>
-            <Th numeric>uncertainty</Th>
-            <Th numeric>total from as found</Th>
-          </tr>
-        </thead>
-        <tbody>
-          {answer.planes.map((plane) => (
-            <tr key={plane.planeId}>
-              <RowHead>{plane.planeName}</RowHead>
-              <Td numeric className="text-base font-semibold">
-                {formatMass(plane.massG, mark)}
-              </Td>
-              <Td numeric className="text-base font-semibold">
-                {formatDegrees(plane.angleDeg, 1, mark)}
-              </Td>
-              <Td numeric>{formatQuantity(plane.radiusMm, 'mm')}</Td>
-              <Td numeric>{formatQuantity(plane.forceN, 'N')}</Td>
-              <Td numeric>{uncertainty(plane.uncertaintyG, plane.uncertaintyDeg)}</Td>
-              <Td numeric>
-                {formatMass(plane.totalMassG, mark)} at{' '}
-                {formatDegrees(plane.totalAngleDeg, 1, mark)}
-              </Td>
-            </tr>
-          ))}
-        </tbody>
-      </Table>
+      <Weights job={job} answer={answer} />
       {answer.planes.map((plane) => (
         <PlaceInWords
           key={plane.planeId}
@@ -76,6 +46,51 @@ export function AnswerCard({ job, answer }: AnswerCardProps) {
       ))}
       <Expected job={job} answer={answer} />
     </div>
+  );
+}
+
+function Weights({ job, answer }: AnswerCardProps) {
+  const mark = job.site.decimalMark;
+  const countsWith = job.angleSense === 'with';
+  return (
+    <Table caption="Add to what is on the rotor now" captionShown roomy>
+      <thead>
+        <tr>
+          <Th>plane</Th>
+          <Th numeric>add</Th>
+          {countsWith && <Th numeric>at, with rotation, as you count</Th>}
+          <Th numeric>at, against rotation</Th>
+          <Th numeric>radius</Th>
+          <Th numeric>force</Th>
+          <Th numeric>uncertainty</Th>
+          <Th numeric>total from as found, against rotation</Th>
+        </tr>
+      </thead>
+      <tbody>
+        {answer.planes.map((plane) => (
+          <tr key={plane.planeId}>
+            <RowHead>{plane.planeName}</RowHead>
+            <Td numeric className="text-base font-semibold">
+              {formatMass(plane.massG, mark)}
+            </Td>
+            {countsWith && (
+              <Td numeric className="text-base font-semibold">
+                {formatDegrees(countedInSense(plane.angleDeg, 'with'), 1, mark)}
+              </Td>
+            )}
+            <Td numeric className="text-base font-semibold">
+              {formatDegrees(plane.angleDeg, 1, mark)}
+            </Td>
+            <Td numeric>{formatQuantity(plane.radiusMm, 'mm')}</Td>
+            <Td numeric>{formatQuantity(plane.forceN, 'N')}</Td>
+            <Td numeric>{uncertainty(plane.uncertaintyG, plane.uncertaintyDeg)}</Td>
+            <Td numeric>
+              {formatMass(plane.totalMassG, mark)} at {formatDegrees(plane.totalAngleDeg, 1, mark)}
+            </Td>
+          </tr>
+        ))}
+      </tbody>
+    </Table>
   );
 }
 

@@ -1,15 +1,19 @@
 import type { PositionShare } from '@/lib/domain/balancing/split-onto-positions';
-import type { AnswerDto } from './balance-job';
+import type { AnswerDto, TrialCheck } from './balance-job';
 
 /** What typed runs come to. */
 export type SolvedRuns = {
   unit: 'mm/s rms' | 'µm p-p';
   rotationFromDriveEnd: 'clockwise' | 'counter-clockwise';
+  /** How degrees were typed; every angle here counts against rotation. */
+  angleSense: 'against' | 'with';
   planes: { id: number; name: string; radiusMm: number }[];
   points: { id: number; label: string }[];
   /** Null where nothing may be fitted; `refusal` says why. */
   answer: AnswerDto | null;
   refusal: string | null;
+  /** How clearly each trial weight was heard. */
+  trialChecks: TrialCheck[];
   /** Trial weights that stay on the rotor. */
   staying: { planeId: number; massG: number; angleDeg: number }[];
   /** The readings of each point, run after run, in lag. */

@@ -1,6 +1,7 @@
 'use client';
 
 import { AnswerCard } from '@/components/balancing/answer-card';
+import { TrialResponses } from '@/components/balancing/trial-responses';
 import type { FaceWeight } from '@/components/rotor-face/face-types';
 import { RotorFace } from '@/components/rotor-face/rotor-face';
 import { Caution } from '@/components/ui/caution';
@@ -17,9 +18,12 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
   const { answer, refusal } = solved;
   if (!answer)
     return (
-      <Notice kind="failure" title="No answer">
-        {refusal}
-      </Notice>
+      <>
+        <Notice kind="failure" title="No answer">
+          {refusal}
+        </Notice>
+        <TrialResponses checks={solved.trialChecks} />
+      </>
     );
   const ground = {
     ...solved,
@@ -31,6 +35,7 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
     <>
       <Panel title="Answer">
         <div className="flex flex-col gap-4">
+          <TrialResponses checks={solved.trialChecks} />
           <AnswerCard job={ground} answer={answer} />
           <Caution code="SAF-01, SAF-03">
             {CAUTIONS['SAF-01'].text} {CAUTIONS['SAF-03'].text}

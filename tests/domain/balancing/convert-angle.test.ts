@@ -4,6 +4,7 @@ import {
   angleOfArc,
   angleOfClock,
   angleOfPosition,
+  countedInSense,
   lagAfterChange,
   lagFromPhase,
   parseAngle,
@@ -47,6 +48,17 @@ describe('angles counted in other ways', () => {
     fc.assert(
       fc.property(turns, (deg) =>
         nearDeg(rotorDegFromWithRotation(rotorDegFromWithRotation(deg)), deg, 1e-9),
+      ),
+    );
+  });
+
+  it('counted with rotation 285° reads as 75°, and typing that gives 285° back', () => {
+    expect(countedInSense(285, 'with')).toBe(75);
+    expect(countedInSense(285, 'against')).toBe(285);
+    expect(countedInSense(0, 'with')).toBe(0);
+    fc.assert(
+      fc.property(turns, (deg) =>
+        nearDeg(rotorDegFromWithRotation(countedInSense(deg, 'with')), deg, 1e-9),
       ),
     );
   });

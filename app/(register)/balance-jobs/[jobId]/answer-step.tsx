@@ -1,9 +1,9 @@
 'use client';
 
 import { AnswerCard } from '@/components/balancing/answer-card';
+import { TrialResponses } from '@/components/balancing/trial-responses';
 import { Notice } from '@/components/ui/notice';
-import { formatNumber, formatQuantity } from '@/lib/format';
-import type { BalanceJobDto, TrialCheck } from '@/lib/schemas/balance-job';
+import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import { acceptAnswerAction } from './actions';
 import { StepForm } from './step-form';
 
@@ -29,32 +29,3 @@ export function AnswerStep({ job }: { job: BalanceJobDto }) {
     </div>
   );
 }
-
-function TrialResponses({ checks }: { checks: readonly TrialCheck[] }) {
-  if (checks.length === 0) return null;
-  return (
-    <ul className="text-sm">
-      {checks.map((check) => (
-        <li key={check.planeId}>
-          Trial in plane {check.planeName}: the reading at {check.pointLabel} changed by{' '}
-          <span className="figures">{formatQuantity(check.changePct, '%')}</span>
-          {check.changeOverNoise !== null && (
-            <>
-              , <span className="figures">{formatNumber(check.changeOverNoise)}</span> times the
-              scatter
-            </>
-          )}
-          : {VERDICT_WORDS[check.verdict]}
-          {!check.thirtyRule && ' The trade’s 30 % or 30° rule is not met.'}
-        </li>
-      ))}
-    </ul>
-  );
-}
-
-const VERDICT_WORDS = {
-  good: 'clear enough.',
-  wide: 'enough for a wide band; a larger trial weight would be better.',
-  refuse: 'too small to be told from the scatter. Fit a larger trial weight.',
-  unknown: 'the scatter is not known from one base run.',
-} as const;
