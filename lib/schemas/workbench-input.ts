@@ -56,12 +56,19 @@ export const typedRunsInput = z
     rotationFromDriveEnd: rotation,
     speedRpm: typedNumber({ what: 'the speed', unit: 'r/min', above: 0, max: 200_000 }),
     rotorMassKg: optionalNumber({ what: 'the rotor mass', unit: 'kg', above: 0 }),
+    scatter: optionalNumber({ what: 'the scatter of one reading', above: 0, max: 1e6 }),
     planes: z.array(plane).min(1).max(2),
     base: z.array(reading),
     trials: z.array(trial),
   })
   .superRefine(({ planes, base, trials }, context) => {
     const wanted = planes.length;
+    if (base.length > 0 && base.every(({ amplitude }) => amplitude === 0))
+      context.addIssue({
+        code: 'custom',
+        path: ['base', 0, 'amplitude'],
+        message: 'The base run reads zero at every point, so there is nothing to correct.',
+      });
     if (base.length === wanted && trials.length === wanted && trials.every(isWhole)) return;
     const message = 'Type a reading of every point in every run, and one trial a plane.';
     context.addIssue({ code: 'custom', message });
@@ -110,4 +117,5 @@ export const splitInput = z.strictObject({
     'Say which way the positions are numbered: against or with rotation.',
   ),
   maxG: optionalNumber({ what: 'the most on one position', unit: 'g', above: 0 }),
+  speedRpm: optionalNumber({ what: 'the speed', unit: 'r/min', above: 0, max: 200_000 }),
 });

@@ -14,6 +14,8 @@ export type SolvedRuns = {
   refusal: string | null;
   /** How clearly each trial weight was heard. */
   trialChecks: TrialCheck[];
+  /** Force of each plane's weight at the speed of the runs, % of the rotor's weight; null without its mass. */
+  forcePctOfRotorWeight: (number | null)[];
   /** Trial weights that stay on the rotor. */
   staying: { planeId: number; massG: number; angleDeg: number }[];
   /** The readings of each point, run after run, in lag. */
@@ -32,7 +34,10 @@ export type SolvedTolerance = {
 };
 
 export type SolvedSplit = {
-  shares: PositionShare[];
+  /** `forceN`: at the speed typed; null without one. */
+  shares: (PositionShare & { forceN: number | null })[];
+  /** How degrees were typed; every angle here counts against rotation. */
+  angleSense: 'against' | 'with';
   /** The weight as it was split, against rotation. */
   massG: number;
   angleDeg: number;

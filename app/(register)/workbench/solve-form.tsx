@@ -95,6 +95,13 @@ function Senses({ state }: { state: ActionState }) {
         kind="decimal"
         state={state}
       />
+      <Field
+        name="scatter"
+        label="Scatter of repeats (optional)"
+        hint="How far repeats of one run lie apart, in the unit of the sizes: gives the answer its uncertainty."
+        kind="decimal"
+        state={state}
+      />
     </div>
   );
 }

@@ -8,7 +8,7 @@ import { Caution } from '@/components/ui/caution';
 import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
 import { CAUTIONS } from '@/lib/domain/cautions';
-import type { DecimalMark } from '@/lib/format';
+import { formatQuantity, type DecimalMark } from '@/lib/format';
 import type { SolvedRuns } from '@/lib/schemas/workbench';
 
 type SolvedRunsPanelsProps = { solved: SolvedRuns; decimalMark: DecimalMark };
@@ -37,6 +37,7 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
         <div className="flex flex-col gap-4">
           <TrialResponses checks={solved.trialChecks} />
           <AnswerCard job={ground} answer={answer} />
+          <ForceShares solved={solved} decimalMark={decimalMark} />
           <Caution code="SAF-01, SAF-03">
             {CAUTIONS['SAF-01'].text} {CAUTIONS['SAF-03'].text}
           </Caution>
@@ -63,6 +64,18 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
       ))}
     </>
   );
+}
+
+/** A weight pulls at the rotor once a turn: how hard, against what the rotor weighs. */
+function ForceShares({ solved, decimalMark }: SolvedRunsPanelsProps) {
+  const known = solved.planes.flatMap(({ name }, index) => {
+    const pct = solved.forcePctOfRotorWeight[index] ?? null;
+    return pct === null
+      ? []
+      : [`in plane ${name} ${formatQuantity(pct, '%', { decimalMark })} of the rotor’s weight`];
+  });
+  if (known.length === 0) return null;
+  return <p className="text-sm">The force of the weight at this speed: {known.join('; ')}.</p>;
 }
 
 function weightsOf({ staying, answer }: SolvedRuns, planeId: number): FaceWeight[] {

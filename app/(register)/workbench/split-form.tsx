@@ -1,18 +1,14 @@
 'use client';
 
-import type { FaceWeight } from '@/components/rotor-face/face-types';
-import { RotorFace } from '@/components/rotor-face/rotor-face';
-import { Caution } from '@/components/ui/caution';
 import { Field } from '@/components/ui/field';
 import { Panel } from '@/components/ui/panel';
 import { RadioField } from '@/components/ui/radio-field';
-import { RowHead, Table, Td, Th } from '@/components/ui/table';
-import { CAUTIONS } from '@/lib/domain/cautions';
-import { formatDegrees, formatMass, formatNumber, type DecimalMark } from '@/lib/format';
+import type { DecimalMark } from '@/lib/format';
 import type { ActionState } from '@/lib/schemas/action-state';
 import type { SolvedSplit } from '@/lib/schemas/workbench';
 import { splitAction } from './actions';
 import { ComputedForm } from './computed-form';
+import { SolvedSplitPanel } from './solved-split';
 import { useComputation } from './use-computation';
 
 /** A weight carried by the numbered positions either side of it. */
@@ -40,7 +36,7 @@ export function SplitForm({ decimalMark }: { decimalMark: DecimalMark }) {
       </ComputedForm>
       <div className="flex min-w-0 flex-col gap-5" aria-live="polite">
         {answer ? (
-          <Split solved={answer} decimalMark={decimalMark} />
+          <SolvedSplitPanel solved={answer} decimalMark={decimalMark} />
         ) : (
           <p className="text-ink-soft">The shares stand here once everything is typed.</p>
         )}
@@ -76,62 +72,14 @@ function Positions({ state }: { state: ActionState }) {
         kind="decimal"
         state={state}
       />
+      <Field
+        name="speedRpm"
+        label="Speed (optional)"
+        hint="For the force on each fixing."
+        unit="r/min"
+        kind="decimal"
+        state={state}
+      />
     </div>
-  );
-}
-
-function Split({ solved, decimalMark }: { solved: SolvedSplit; decimalMark: DecimalMark }) {
-  const { shares, massG, angleDeg, sumOverWhole, positions } = solved;
-  const proposed = shares.map((share): FaceWeight => ({
-    id: share.label,
-    massG: share.massG,
-    angleDeg: share.angleDeg,
-    label: `position ${share.label}`,
-    state: 'proposed',
-  }));
-  return (
-    <Panel title="Shares">
-      <div className="flex flex-col gap-4">
-        <Table caption="What each position carries" roomy>
-          <thead>
-            <tr>
-              <Th>position</Th>
-              <Th numeric>fit</Th>
-              <Th numeric>at, against rotation</Th>
-            </tr>
-          </thead>
-          <tbody>
-            {shares.map((share) => (
-              <tr key={share.label}>
-                <RowHead>{share.label}</RowHead>
-                <Td numeric className="text-base font-semibold">
-                  {formatMass(share.massG, decimalMark)}
-                </Td>
-                <Td numeric>{formatDegrees(share.angleDeg, 1, decimalMark)}</Td>
-              </tr>
-            ))}
-          </tbody>
-        </Table>
-        <p className="text-sm text-ink-soft">
-          Together they act as {formatMass(massG, decimalMark)} at{' '}
-          {formatDegrees(angleDeg, 1, decimalMark)} against rotation; their sum is{' '}
-          <span className="figures">
-            {formatNumber(sumOverWhole, { decimals: 2, decimalMark })}
-          </span>{' '}
-          times as much.
-        </p>
-        <Caution code="SAF-06">{CAUTIONS['SAF-06'].text}</Caution>
-        <RotorFace
-          plane={{
-            name: 'The plane',
-            radiusMm: solved.radiusMm,
-            rotationFromDriveEnd: solved.rotationFromDriveEnd === 'clockwise' ? 'cw' : 'ccw',
-            positions,
-            decimalMark,
-          }}
-          weights={proposed}
-        />
-      </div>
-    </Panel>
   );
 }

@@ -24,6 +24,8 @@ export type TypedRuns = {
     readonly readings: readonly TypedReading[];
   }[];
   readonly rotor?: JobRotor | null;
+  /** Known scatter of one reading in the unit of the whole, where no run was repeated. */
+  readonly scatter?: number | null;
 };
 
 /**
@@ -64,6 +66,7 @@ export function jobFromTypedRuns(typed: TypedRuns): Result<JobInput> {
     runs,
     weightsNow: on,
     rotor: typed.rotor ?? null,
+    scatter: typed.scatter ?? null,
   });
 }
 

@@ -59,6 +59,7 @@ function solvedRuns(typed: Typed, job: JobInput, solution: JobSolution): SolvedR
     answer: refusal === null ? answerDto(job, solution, 'correction') : null,
     refusal,
     trialChecks: trialCheckDtos(job, solution),
+    forcePctOfRotorWeight: (solution.answer?.add ?? []).map((plane) => plane.forcePctOfRotorWeight),
     staying: solution.weightsNow.map(({ planeId, massG, angleDeg }) => ({
       planeId,
       massG,

@@ -1,4 +1,5 @@
 import 'server-only';
+import { centrifugalForceN } from '@/lib/domain/balancing/centrifugal-force';
 import {
   angleOfPosition,
   parseAngle,
@@ -32,7 +33,8 @@ export const split = computation({ permission: 'workbench:use', input: splitInpu
   if (!shares.ok) return shares;
   const sum = shares.value.reduce((total, { massG }) => total + massG, 0);
   return ok<SolvedSplit>({
-    shares: shares.value,
+    shares: shares.value.map((share) => ({ ...share, forceN: forceOf(share.massG, given) })),
+    angleSense: given.angleSense,
     ...mass,
     sumOverWhole: sum / mass.massG,
     radiusMm: given.radiusMm,
@@ -40,3 +42,10 @@ export const split = computation({ permission: 'workbench:use', input: splitInpu
     positions: positions.map(({ label, angleDeg }) => ({ label, angleDeg })),
   });
 });
+
+function forceOf(
+  massG: number,
+  { radiusMm, speedRpm }: { radiusMm: number; speedRpm: number | null },
+): number | null {
+  return speedRpm === null ? null : centrifugalForceN(massG * radiusMm, speedRpm);
+}

@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { tolerance } from '@/lib/server/workbench/tolerance';
+import { near } from '@/tests/domain/balancing/near';
 import scenarios from '@/tests/reference/data/balancing-scenarios.json';
-import { reader, readings, refused, s02, solved, type Runs } from './runs-as-typed';
+import { reader, readings, refused, runs, s02, solved, trial, type Runs } from './runs-as-typed';
 
-const { S02 } = scenarios.scenarios;
+const { S02, S08 } = scenarios.scenarios;
 
 /** S02 with its first trial changed. */
 function firstTrial(over: Partial<Runs['trials'][number]>): Runs {
@@ -74,6 +75,33 @@ describe('runs that cannot be answered for', () => {
     expect(refusal).toContain('planes 1 and 2 changed every point alike');
     expect(refusal).not.toContain('offered');
     expect(trialChecks).toHaveLength(2);
+  });
+
+  it('a base run of zero, at its own field', async () => {
+    const still = S02.inputs.base.map(() => ({ amp: 0, deg: 0 }));
+    const { field, message } = await refused(s02({ base: readings(still) }));
+    expect(field).toBe('base.0.amplitude');
+    expect(message).toContain('nothing to correct');
+  });
+
+  // Scenario S08, with the scatter of its four base runs typed: change 1.9 % of the reading.
+  it('a trial that is not heard over the scatter typed', async () => {
+    const {
+      base_mean: mean,
+      scatter_complex_sd_mm_s: scatter,
+      trial_change_pct: pct,
+    } = S08.expected;
+    const { answer, refusal, trialChecks } = await solved(
+      runs({
+        scatter,
+        base: readings([mean]),
+        trials: [trial([S08.inputs.trial.g, S08.inputs.trial.deg], [S08.inputs.trial_run])],
+      }),
+    );
+    expect(answer).toBeNull();
+    expect(refusal).toMatch(/plane 1 changed the reading by 0\.4\d times the noise/);
+    near(trialChecks[0]?.changePct ?? NaN, pct, 0.1);
+    expect(trialChecks[0]).toMatchObject({ verdict: 'refuse', thirtyRule: false });
   });
 
   it('a trial that may be noise is answered with that said, and by the name of its run', async () => {

@@ -64,7 +64,19 @@ describe('scenarios', () => {
     expect(got.trialChecks).toHaveLength(1);
     near(got.trialChecks[0]?.changePct ?? NaN, changePct, S01.tol.pct);
     expect(got.trialChecks[0]).toMatchObject({ verdict: 'unknown', thirtyRule: true });
+    expect(got.answer?.planes[0]?.uncertaintyG).toBeNull();
+    // 26.27 g at 400 mm and 1480 r/min pull with 252.4 N at a rotor that weighs 2059.4 N.
+    near(got.forcePctOfRotorWeight[0] ?? NaN, 12.26, 0.05);
   });
+});
+
+it('the scatter typed gives the answer its uncertainty', async () => {
+  const { answer } = await solved(s02({ scatter: '0,03' }));
+  for (const plane of answer?.planes ?? []) {
+    expect(plane.uncertaintyG).toBeGreaterThan(0.1);
+    expect(plane.uncertaintyG).toBeLessThan(plane.massG / 4);
+  }
+  expect(answer?.planes).toHaveLength(2);
 });
 
 describe('published cases', () => {
