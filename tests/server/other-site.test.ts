@@ -1,34 +1,22 @@
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import config from '@/mikro-orm.config';
-import { closeDatabase } from '@/lib/server/db';
-import { freshDatabase } from '@/tests/support/fresh-database';
+import { openPlant } from '@/tests/support/open-plant';
 import type { OtherSiteCase } from '@/tests/support/other-site';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import type { SmallPlant } from '@/tests/support/plant';
 
 const files = import.meta.glob<{ cases: OtherSiteCase[] }>('./other-site/*.cases.ts', {
   eager: true,
 });
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 for (const [file, { cases }] of Object.entries(files)) {
   describe(`an actor of another site, ${file}`, () => {

@@ -1,36 +1,25 @@
 import { hash } from 'bcryptjs';
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { Person, Session } from '@/entities/person';
 import { actorOfKey } from '@/lib/server/actor';
-import { closeDatabase } from '@/lib/server/db';
 import { hashSessionKey } from '@/lib/server/session';
 import { endSession, signIn } from '@/lib/server/sign-in';
-import config from '@/mikro-orm.config';
-import { freshDatabase } from '@/tests/support/fresh-database';
+import { openPlant } from '@/tests/support/open-plant';
 
-let orm: MikroORM;
 let em: EntityManager;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 const PASSWORD = 'three plain words';
 const START = new Date('2026-11-02T06:00:00Z');
 const after = (seconds: number) => new Date(START.getTime() + seconds * 1000);
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
+  ({ em, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 async function person(email: string, state: 'active' | 'closed' = 'active'): Promise<number> {
   const made = em.create(Person, {

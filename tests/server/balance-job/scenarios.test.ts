@@ -1,20 +1,13 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { Coefficient } from '@/entities/answer';
 import { Plane, Rotor } from '@/entities/rotor';
 import { LimitSet } from '@/entities/limit-set';
 import { Machine } from '@/entities/machine';
 import { Site } from '@/entities/site';
-import config from '@/mikro-orm.config';
-import { closeDatabase } from '@/lib/server/db';
 import { signJob } from '@/lib/server/commands/sign-job';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import {
-  seedMachine,
-  seedSmallPlant,
-  type SeededMachine,
-  type SmallPlant,
-} from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import { seedMachine, type SeededMachine, type SmallPlant } from '@/tests/support/plant';
 import { JobDriver, valueOf } from './job-driver';
 import scenarios from './scenarios.json';
 
@@ -22,25 +15,15 @@ import scenarios from './scenarios.json';
 // from the rounded inputs a person would type.
 const { S01, S02, S03 } = scenarios;
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 type Change = {
   tag: string;

@@ -1,38 +1,26 @@
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { LimitSet } from '@/entities/limit-set';
 import { Site } from '@/entities/site';
-import { closeDatabase } from '@/lib/server/db';
-import config from '@/mikro-orm.config';
 import { near } from '@/tests/domain/balancing/near';
 import data from '@/tests/reference/data/balancing-scenarios.json';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedMachine, seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import { seedMachine, type SmallPlant } from '@/tests/support/plant';
 import { JobDriver, valueOf } from './job-driver';
 
 // Scenario S07: invented machine; expected values computed by an independent implementation.
 const { inputs, expected, tol } = data.scenarios.S07;
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 let made = 0;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 /** S07 up to its check run: the trial's angle was counted with rotation and typed as against it. */
 async function afterCheck(check: { amp: number; deg: number }): Promise<JobDriver> {

@@ -1,41 +1,29 @@
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { RunVector } from '@/entities/balance-job';
 import { LimitSet } from '@/entities/limit-set';
 import { Site } from '@/entities/site';
 import { Weight } from '@/entities/weight';
-import config from '@/mikro-orm.config';
 import { acceptAnswer } from '@/lib/server/commands/accept-answer';
 import { lineThroughRun } from '@/lib/server/commands/settle-run';
 import { signJob } from '@/lib/server/commands/sign-job';
 import { stopJob } from '@/lib/server/commands/stop-job';
-import { closeDatabase } from '@/lib/server/db';
 import { jobRecord } from '@/lib/server/queries/job-record';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedMachine, seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import { seedMachine, type SmallPlant } from '@/tests/support/plant';
 import { JobDriver, valueOf } from './job-driver';
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 let made = 0;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 async function openJob(
   over: Partial<Parameters<typeof JobDriver.open>[2]> = {},

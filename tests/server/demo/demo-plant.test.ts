@@ -26,16 +26,7 @@ import { SUNDVIK_MACHINES } from '@/seeders/sundvik-machines';
 import { freshDatabase } from '@/tests/support/fresh-database';
 import { actorOf } from '@/lib/server/actor';
 import { dueCardOf } from './due-cards';
-import { ask, countOf, seed, type Ran } from './seeding';
-
-const READINGS_SUM = `
-  select md5(string_agg(concat_ws(' ', m.tag, p.label, r.kind, r.value, r.zone, r.taken_at), ','
-    order by m.tag, p.label, r.kind, r.taken_at, r.status)) as sum
-  from reading r join point p on p.id = r.point_id join machine m on m.id = p.machine_id`;
-const WEIGHTS_SUM = `
-  select md5(string_agg(concat_ws(' ', o.serial, w.mass_g, w.angle_deg, w.fitted_at, w.ending), ','
-    order by o.serial, w.fitted_at)) as sum
-  from weight w join rotor o on o.id = w.rotor_id`;
+import { ask, countOf, READINGS_SUM, seed, WEIGHTS_SUM, type Ran } from './seeding';
 
 const leftBehind = new Map<string, unknown>();
 let em: EntityManager;

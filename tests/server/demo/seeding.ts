@@ -1,6 +1,18 @@
 import { execFile } from 'node:child_process';
 import { Client } from 'pg';
 
+/** A checksum of every reading, to the last digit. */
+export const READINGS_SUM = `
+  select md5(string_agg(concat_ws(' ', m.tag, p.label, r.kind, r.value, r.zone, r.taken_at), ','
+    order by m.tag, p.label, r.kind, r.taken_at, r.status)) as sum
+  from reading r join point p on p.id = r.point_id join machine m on m.id = p.machine_id`;
+
+/** A checksum of every weight. */
+export const WEIGHTS_SUM = `
+  select md5(string_agg(concat_ws(' ', o.serial, w.mass_g, w.angle_deg, w.fitted_at, w.ending), ','
+    order by o.serial, w.fitted_at)) as sum
+  from weight w join rotor o on o.id = w.rotor_id`;
+
 /** How a seeding ended. */
 export type Ran = { code: number; output: string; seconds: number };
 

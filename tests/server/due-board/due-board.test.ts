@@ -1,15 +1,13 @@
 import { readFileSync } from 'node:fs';
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { z } from 'zod';
 import { LimitUse } from '@/entities/limit-set';
 import { Machine } from '@/entities/machine';
 import { atTime } from '@/lib/server/clock';
-import { closeDatabase } from '@/lib/server/db';
 import { dueBoard } from '@/lib/server/queries/due-board';
-import config from '@/mikro-orm.config';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import type { SmallPlant } from '@/tests/support/plant';
 import { BoardPlant, daysBefore } from './board-plant';
 
 const numbers = z.array(z.number());
@@ -54,28 +52,18 @@ const scenario = z
   );
 
 const NOW = new Date('2026-11-02T06:00:00Z');
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
 let book: BoardPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
   book = await BoardPlant.at(em, plant.home.siteId, plant.at('engineer').personId);
   for (const unit of scenario.units) await enter(unit);
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 async function enter(unit: (typeof scenario.units)[number]): Promise<void> {
   const { readings, zone_limits: limits, median_days_between_balances: life } = unit;

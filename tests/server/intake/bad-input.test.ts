@@ -8,7 +8,7 @@ import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
 import { getEntityManager } from '@/lib/server/db';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import { bytesOf, failureOf, ONE_COLUMN_G, sineCsv, valueOf } from './records-of-test';
 
 let em: EntityManager;

@@ -11,7 +11,7 @@ import { keepHeld, lineThrough, rehome } from '@/lib/server/commands/settle-reco
 import { reopenUpload } from '@/lib/server/commands/settle-upload';
 import { getEntityManager } from '@/lib/server/db';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import {
   bytesOf,
   failureOf,

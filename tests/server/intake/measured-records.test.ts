@@ -6,7 +6,7 @@ import { Reading } from '@/entities/measured-record';
 import { getEntityManager } from '@/lib/server/db';
 import { readingPage } from '@/lib/server/queries/reading-page';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import { machineWith, ONE_COLUMN_G, uploadAndConfirm } from './records-of-test';
 
 // Measured records of the Case Western Reserve University Bearing Data Center. They state no

@@ -10,7 +10,7 @@ import { spectrumData, waveformData } from '@/lib/server/queries/reading-data';
 import { readingPage } from '@/lib/server/queries/reading-page';
 import { uploadedFile, uploadPage, uploadPreview } from '@/lib/server/queries/upload-page';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import {
   bytesOf,
   machineWith,

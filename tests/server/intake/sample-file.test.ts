@@ -6,7 +6,7 @@ import { routes } from '@/lib/routes';
 import { getEntityManager } from '@/lib/server/db';
 import { nearDeg, near } from '@/tests/domain/balancing/near';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import { machineWith, uploadAndConfirm } from './records-of-test';
 
 let em: EntityManager;

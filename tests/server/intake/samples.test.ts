@@ -6,7 +6,7 @@ import { buildRecord, loadRaw } from '@/lib/server/measure/keep-waveform';
 import { loadPointContext } from '@/lib/server/measure/point-context';
 import { decodeSamples, encodeSamples } from '@/lib/server/samples';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import { valueOf } from './records-of-test';
 
 const bits = (values: Float64Array): string[] =>

@@ -6,7 +6,7 @@ import type { LayoutChoicesInput } from '@/lib/schemas/upload-input';
 import { keepHeld, rehome } from '@/lib/server/commands/settle-record';
 import { getEntityManager } from '@/lib/server/db';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import { machineWith, scenarioFile, uploadAndConfirm, valueOf } from './records-of-test';
 
 // Scenarios S12, S15 and S17: invented records; expected values computed independently of this

@@ -3,7 +3,7 @@ import type { Actor } from '@/lib/schemas/actor';
 import { confirmUpload } from '@/lib/server/commands/confirm-upload';
 import { receiveUpload } from '@/lib/server/commands/receive-upload';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import { bytesOf, failureOf, ONE_COLUMN_G, sineCsv, valueOf } from './records-of-test';
 
 let plant: SmallPlant;

@@ -8,7 +8,7 @@ import { receiveUpload } from '@/lib/server/commands/receive-upload';
 import { reopenUpload, withdrawUpload } from '@/lib/server/commands/settle-upload';
 import { getEntityManager } from '@/lib/server/db';
 import type { SmallPlant } from '@/tests/support/plant';
-import { openPlant } from './open-plant';
+import { openPlant } from '@/tests/support/open-plant';
 import {
   bytesOf,
   failureOf,

@@ -1,9 +1,8 @@
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { LimitUse } from '@/entities/limit-set';
 import { Position } from '@/entities/rotor';
-import config from '@/mikro-orm.config';
 import { createMachine } from '@/lib/server/commands/create-machine';
 import {
   chooseLimitSet,
@@ -13,35 +12,24 @@ import {
   restoreMachine,
   retireMachine,
 } from '@/lib/server/commands/edit-machine';
-import { closeDatabase } from '@/lib/server/db';
 import { findMachines } from '@/lib/server/queries/find-machines';
 import { machinePage } from '@/lib/server/queries/machine-page';
 import { plantBook } from '@/lib/server/queries/plant-book';
 import { pointTrend } from '@/lib/server/queries/point-trend';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import type { SmallPlant } from '@/tests/support/plant';
 import { valueOf } from '../balance-job/job-driver';
 import { newMachine } from './new-machine';
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 const engineer = () => plant.at('engineer');
 const create = (over: Parameters<typeof newMachine>[1] = {}) =>

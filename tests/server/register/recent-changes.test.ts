@@ -1,36 +1,24 @@
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { MeasuredRecord, Reading } from '@/entities/measured-record';
 import { atTime } from '@/lib/server/clock';
-import { closeDatabase } from '@/lib/server/db';
 import { recentChanges } from '@/lib/server/queries/recent-changes';
-import config from '@/mikro-orm.config';
 import { BoardPlant, daysBefore } from '@/tests/server/due-board/board-plant';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import type { SmallPlant } from '@/tests/support/plant';
 
 const NOW = new Date('2026-11-02T06:00:00Z');
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
 let book: BoardPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
   book = await BoardPlant.at(em, plant.home.siteId, plant.at('engineer').personId);
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 async function readings(tag: string, ...series: [days: number, value: number][]): Promise<number> {
   const machine = await book.machine(tag, 'B', [1.4, 2.8, 4.5]);

@@ -1,38 +1,26 @@
 import { hash } from 'bcryptjs';
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { Person, Session } from '@/entities/person';
 import { changePassword } from '@/lib/server/commands/change-password';
-import { closeDatabase } from '@/lib/server/db';
 import { signIn } from '@/lib/server/sign-in';
-import config from '@/mikro-orm.config';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import type { SmallPlant } from '@/tests/support/plant';
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 
 const OLD = 'the password of now';
 const NEXT = 'three plain words';
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
   await em.nativeUpdate(Person, {}, { passwordHash: await hash(OLD, 4) });
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 describe('one’s own password', () => {
   it('is changed by every role that knows the one of now; sessions end, others’ stay', async () => {

@@ -1,4 +1,4 @@
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { LimitSet } from '@/entities/limit-set';
 import { Machine } from '@/entities/machine';
@@ -6,35 +6,23 @@ import type { createLimitSetInput } from '@/lib/schemas/settings-input';
 import { chooseLimitSet } from '@/lib/server/commands/edit-machine';
 import { createMachine } from '@/lib/server/commands/create-machine';
 import { createLimitSet, retireLimitSet } from '@/lib/server/commands/limit-sets';
-import { closeDatabase } from '@/lib/server/db';
 import { limitSets } from '@/lib/server/queries/limit-sets';
 import { newMachineForm } from '@/lib/server/queries/machine-forms';
-import config from '@/mikro-orm.config';
 import { newMachine } from '@/tests/server/register/new-machine';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import type { SmallPlant } from '@/tests/support/plant';
 import type { z } from 'zod';
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 let made = 0;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 type Input = z.input<typeof createLimitSetInput>;
 

@@ -1,5 +1,5 @@
 import { compare } from 'bcryptjs';
-import { MikroORM, type EntityManager } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
 import { Person, Session, SiteAccess } from '@/entities/person';
@@ -13,33 +13,21 @@ import {
   reopenPerson,
   setPassword,
 } from '@/lib/server/commands/people';
-import { closeDatabase } from '@/lib/server/db';
 import { people } from '@/lib/server/queries/people';
 import { signIn } from '@/lib/server/sign-in';
-import config from '@/mikro-orm.config';
-import { freshDatabase } from '@/tests/support/fresh-database';
-import { seedSmallPlant, type SmallPlant } from '@/tests/support/plant';
+import { openPlant } from '@/tests/support/open-plant';
+import type { SmallPlant } from '@/tests/support/plant';
 
-let orm: MikroORM;
 let em: EntityManager;
 let plant: SmallPlant;
-let drop: () => Promise<void>;
+let close: () => Promise<void>;
 let made = 0;
 
 beforeAll(async () => {
-  const database = await freshDatabase();
-  drop = database.close;
-  process.env.DATABASE_URL = database.url;
-  orm = await MikroORM.init({ ...config, clientUrl: database.url });
-  em = orm.em.fork();
-  plant = await seedSmallPlant(em);
+  ({ em, plant, close } = await openPlant());
 });
 
-afterAll(async () => {
-  await closeDatabase();
-  await orm.close(true);
-  await drop();
-});
+afterAll(() => close());
 
 const administrator = () => plant.at('administrator');
 const PASSWORD = 'three plain words';
