@@ -70,7 +70,7 @@ async function serve({ port, development, settings, lock, interrupted }) {
   });
   if (server.ready) announce(address);
   const code = await server.ended;
-  if (!process.env.DATABASE_URL)
+  if (!chosenDatabase())
     say('Evenrun has stopped. Its database runs on; “npm run stop” ends that too.');
   process.exitCode = interrupted.ended ? 0 : code;
 }
@@ -84,5 +84,7 @@ function announce(address) {
     for (const { email, password, role, site } of JSON.parse(readFileSync(file, 'utf8')))
       say(`  ${email.padEnd(32)} ${password.padEnd(20)} ${role}, ${site}`);
   }
-  say('Ctrl-C ends the web server; “npm run stop” ends the database as well.');
+  say(
+    `Ctrl-C ends the web server${chosenDatabase() ? '' : '; “npm run stop” ends the database as well'}.`,
+  );
 }

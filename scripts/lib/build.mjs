@@ -51,7 +51,7 @@ async function keepingTypeSettings(action) {
 }
 
 function buildSentence(output) {
-  if (/ENOSPC|No space left on device/i.test(output)) return causeOf(output);
+  if (/ENOSPC|No space left on device|EDQUOT|EACCES/.test(output)) return causeOf(output);
   if (/heap out of memory|SIGKILL/.test(output))
     return 'The product could not be built: the machine ran out of memory. Free about 2 GB, then run the command again.';
   const last = output.trim().split('\n').slice(-40).join('\n');

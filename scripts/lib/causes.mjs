@@ -1,11 +1,13 @@
+import { ROOT } from './places.mjs';
+
 const CAUSES = [
   [
-    /ENOSPC|No space left on device/i,
+    /ENOSPC|No space left on device|enough free space|EDQUOT|quota exceeded/i,
     'The disk is full. Free some space, then run the command again.',
   ],
   [
     /EACCES|EPERM|Permission denied/i,
-    'A file or folder here may not be read or written by this user, often because an earlier run was made as root. Run the command as the user who owns the folder .data, or remove that folder to begin anew.',
+    `This user may not read or write some of this project’s files, often because they were fetched or made as root. Run the command as root, or end what runs from this folder and give it to this user: as root, “chown -R ${process.getuid()} ${ROOT}”.`,
   ],
   [
     /EAI_AGAIN|ENOTFOUND|ETIMEDOUT|ENETUNREACH|EHOSTUNREACH|ECONNREFUSED|network connectivity/i,

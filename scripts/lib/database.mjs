@@ -65,7 +65,7 @@ async function ask(url, sql) {
 function databaseSentence(url, output) {
   const { host, pathname, username } = new URL(url);
   const name = pathname.slice(1);
-  if (/ECONNREFUSED|ENOTFOUND|EAI_AGAIN|ETIMEDOUT/.test(output))
+  if (/ECONNREFUSED|ENOTFOUND|EAI_AGAIN|ETIMEDOUT|EHOSTUNREACH|Connection terminated/.test(output))
     return `No database server answers at ${host}. Check DATABASE_URL and that the server runs, then run the command again.`;
   if (/authentication failed|28P01|28000|no pg_hba.conf/.test(output))
     return `The database server at ${host} does not accept the user “${username}” with this password. Check DATABASE_URL, then run the command again.`;

@@ -7,6 +7,7 @@ import { has, run } from './run.mjs';
 import { Stop, say } from './say.mjs';
 
 const LOCK_FILE = `${ROOT}package-lock.json`;
+const CI = ['ci', '--include=dev', '--no-audit', '--no-fund'];
 const STAMP = `${ROOT}node_modules/.evenrun-lock`;
 
 /** Installs the packages of the lock file where they are missing or the lock file has changed. */
@@ -40,9 +41,8 @@ async function install() {
   if (!(await has('npm')))
     throw new Stop('npm is missing. Install Node.js 20 with its npm, then run the command again.');
   say('Installing the npm packages of package-lock.json; this takes a minute or two …');
-  const { code, output } = await run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'], {
-    cwd: ROOT,
-  });
+  // Without its log level, a silent “npm run” would silence the reason of a failure.
+  const { code, output } = await run('npm', [...CI, '--loglevel=error'], { cwd: ROOT });
   if (code !== 0)
     throw new Stop(
       causeOf(output) ??
