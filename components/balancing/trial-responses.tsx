@@ -1,19 +1,24 @@
-import { formatNumber, formatQuantity } from '@/lib/format';
+import { formatNumber, formatQuantity, type DecimalMark } from '@/lib/format';
 import type { TrialCheck } from '@/lib/schemas/balance-job';
 
+type TrialResponsesProps = { checks: readonly TrialCheck[]; decimalMark: DecimalMark };
+
 /** How clearly each trial weight was heard. */
-export function TrialResponses({ checks }: { checks: readonly TrialCheck[] }) {
+export function TrialResponses({ checks, decimalMark }: TrialResponsesProps) {
   if (checks.length === 0) return null;
   return (
     <ul className="text-sm">
       {checks.map((check) => (
         <li key={check.planeId}>
           Trial in plane {check.planeName}: the reading at {check.pointLabel} changed by{' '}
-          <span className="figures">{formatQuantity(check.changePct, '%')}</span>
+          <span className="figures">{formatQuantity(check.changePct, '%', { decimalMark })}</span>
           {check.changeOverNoise !== null && (
             <>
-              , <span className="figures">{formatNumber(check.changeOverNoise)}</span> times the
-              scatter
+              ,{' '}
+              <span className="figures">
+                {formatNumber(check.changeOverNoise, { decimalMark })}
+              </span>{' '}
+              times the scatter
             </>
           )}
           : {VERDICT_WORDS[check.verdict]}

@@ -22,7 +22,7 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
         <Notice kind="failure" title="No answer">
           {refusal}
         </Notice>
-        <TrialResponses checks={solved.trialChecks} />
+        <TrialResponses checks={solved.trialChecks} decimalMark={decimalMark} />
       </>
     );
   const ground = {
@@ -35,7 +35,7 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
     <>
       <Panel title="Answer">
         <div className="flex flex-col gap-4">
-          <TrialResponses checks={solved.trialChecks} />
+          <TrialResponses checks={solved.trialChecks} decimalMark={decimalMark} />
           <AnswerCard job={ground} answer={answer} />
           <ForceShares solved={solved} decimalMark={decimalMark} />
           <Caution code="SAF-01, SAF-03">

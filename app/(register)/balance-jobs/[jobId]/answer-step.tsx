@@ -12,7 +12,7 @@ export function AnswerStep({ job }: { job: BalanceJobDto }) {
   const { answer } = job;
   return (
     <div className="flex flex-col gap-4">
-      <TrialResponses checks={job.trialChecks} />
+      <TrialResponses checks={job.trialChecks} decimalMark={job.site.decimalMark} />
       {job.answerFailure !== null && <Notice kind="failure">{job.answerFailure}</Notice>}
       {answer && (
         <>
