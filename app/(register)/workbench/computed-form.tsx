@@ -9,13 +9,14 @@ type ComputedFormProps = {
   state: ActionState;
   pending: boolean;
   onSubmit: (event: SyntheticEvent<HTMLFormElement>) => void;
+  onInput: () => void;
   children: ReactNode;
 };
 
 /** What is typed for a computation, with its button. */
-export function ComputedForm({ state, pending, onSubmit, children }: ComputedFormProps) {
+export function ComputedForm({ state, pending, onSubmit, onInput, children }: ComputedFormProps) {
   return (
-    <form onSubmit={onSubmit} className="flex min-w-0 flex-col gap-5" noValidate>
+    <form {...{ onSubmit, onInput }} className="flex min-w-0 flex-col gap-5" noValidate>
       <ErrorSummary state={state} title="Nothing was computed" />
       {children}
       <div>

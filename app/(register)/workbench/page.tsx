@@ -23,7 +23,7 @@ export default async function WorkbenchPage({ searchParams }: Props) {
     <>
       <PageHead
         title="Workbench"
-        note="The computations on their own. Nothing is saved: what hangs on a rotor belongs into a balance job."
+        note="The computations on their own. Nothing is saved: what hangs on a rotor belongs in a balance job."
         actions={
           <a className="link" href={routes.api.openApi()}>
             The same for programs (OpenAPI)

@@ -14,7 +14,7 @@ type ReadingFieldsProps = {
 export function ReadingFields({ at, points, state }: ReadingFieldsProps) {
   return Array.from({ length: points }, (_, index) => (
     <fieldset key={index} className="grid gap-3 sm:grid-cols-2 [&:not(:first-of-type)]:mt-3">
-      <legend className={points === 1 ? 'sr-only' : 'pr-3 text-sm font-semibold'}>
+      <legend className={points === 1 ? 'sr-only' : 'pb-1 text-sm font-semibold'}>
         Point {index + 1}
       </legend>
       <Field name={`${at}.${index}.amplitude`} label="1x size" kind="decimal" state={state} />

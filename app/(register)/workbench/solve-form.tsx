@@ -9,6 +9,7 @@ import type { SolvedRuns } from '@/lib/schemas/workbench';
 import { solveRunsAction } from './actions';
 import { ComputedForm } from './computed-form';
 import { ReadingFields } from './reading-fields';
+import { ResultColumn } from './result-column';
 import { SolvedRunsPanels } from './solved-runs';
 import { TrialFields } from './trial-fields';
 import { useComputation } from './use-computation';
@@ -17,11 +18,12 @@ type SolveFormProps = { planes: 1 | 2; decimalMark: DecimalMark };
 
 /** Base run and one trial a plane, typed; the answer beside them. */
 export function SolveForm({ planes, decimalMark }: SolveFormProps) {
-  const { state, onSubmit, pending, answer } = useComputation<SolvedRuns>(solveRunsAction);
+  const { form, answer, changed } = useComputation<SolvedRuns>(solveRunsAction);
+  const { state } = form;
   const indices = Array.from({ length: planes }, (_, index) => index);
   return (
     <div className="grid items-start gap-5 xl:grid-cols-2">
-      <ComputedForm {...{ state, onSubmit, pending }}>
+      <ComputedForm {...form}>
         <Panel title="How it is read and counted" note="nothing is assumed">
           <Senses state={state} />
         </Panel>
@@ -37,13 +39,13 @@ export function SolveForm({ planes, decimalMark }: SolveFormProps) {
           </Panel>
         ))}
       </ComputedForm>
-      <div className="flex min-w-0 flex-col gap-5" aria-live="polite">
+      <ResultColumn {...{ answer, changed }}>
         {answer ? (
           <SolvedRunsPanels solved={answer} decimalMark={decimalMark} />
         ) : (
           <p className="text-ink-soft">The answer stands here once everything is typed.</p>
         )}
-      </div>
+      </ResultColumn>
     </div>
   );
 }

@@ -8,15 +8,17 @@ import type { ActionState } from '@/lib/schemas/action-state';
 import type { SolvedSplit } from '@/lib/schemas/workbench';
 import { splitAction } from './actions';
 import { ComputedForm } from './computed-form';
+import { ResultColumn } from './result-column';
 import { SolvedSplitPanel } from './solved-split';
 import { useComputation } from './use-computation';
 
 /** A weight carried by the numbered positions either side of it. */
 export function SplitForm({ decimalMark }: { decimalMark: DecimalMark }) {
-  const { state, onSubmit, pending, answer } = useComputation<SolvedSplit>(splitAction);
+  const { form, answer, changed } = useComputation<SolvedSplit>(splitAction);
+  const { state } = form;
   return (
     <div className="grid items-start gap-5 xl:grid-cols-2">
-      <ComputedForm {...{ state, onSubmit, pending }}>
+      <ComputedForm {...form}>
         <Panel title="The weight">
           <div className="grid gap-4 sm:grid-cols-2">
             <Field name="massG" label="Mass" unit="g" kind="decimal" state={state} />
@@ -34,13 +36,13 @@ export function SplitForm({ decimalMark }: { decimalMark: DecimalMark }) {
           <Positions state={state} />
         </Panel>
       </ComputedForm>
-      <div className="flex min-w-0 flex-col gap-5" aria-live="polite">
+      <ResultColumn {...{ answer, changed }}>
         {answer ? (
           <SolvedSplitPanel solved={answer} decimalMark={decimalMark} />
         ) : (
           <p className="text-ink-soft">The shares stand here once everything is typed.</p>
         )}
-      </div>
+      </ResultColumn>
     </div>
   );
 }

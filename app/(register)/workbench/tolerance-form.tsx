@@ -5,10 +5,17 @@ import { Fact, Facts } from '@/components/ui/fact';
 import { Panel } from '@/components/ui/panel';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { QUALITY_GRADES } from '@/lib/domain/balancing/quality-grades';
-import { formatNumber, formatQuantity, NOT_MEASURED, type DecimalMark } from '@/lib/format';
+import {
+  formatExact,
+  formatNumber,
+  formatQuantity,
+  NOT_MEASURED,
+  type DecimalMark,
+} from '@/lib/format';
 import type { SolvedTolerance } from '@/lib/schemas/workbench';
 import { toleranceAction } from './actions';
 import { ComputedForm } from './computed-form';
+import { ResultColumn } from './result-column';
 import { useComputation } from './use-computation';
 
 const FIELDS = [
@@ -23,10 +30,11 @@ const FIELDS = [
 
 /** What a grade allows a rotor. */
 export function ToleranceForm({ decimalMark }: { decimalMark: DecimalMark }) {
-  const { state, onSubmit, pending, answer } = useComputation<SolvedTolerance>(toleranceAction);
+  const { form, answer, changed } = useComputation<SolvedTolerance>(toleranceAction);
+  const { state } = form;
   return (
     <div className="grid items-start gap-5 xl:grid-cols-2">
-      <ComputedForm {...{ state, onSubmit, pending }}>
+      <ComputedForm {...form}>
         <Panel title="The rotor">
           <div className="grid gap-4 sm:grid-cols-2">
             {FIELDS.map((field) => (
@@ -35,10 +43,10 @@ export function ToleranceForm({ decimalMark }: { decimalMark: DecimalMark }) {
           </div>
         </Panel>
       </ComputedForm>
-      <div className="flex min-w-0 flex-col gap-5" aria-live="polite">
+      <ResultColumn {...{ answer, changed }}>
         {answer && <Tolerance solved={answer} decimalMark={decimalMark} />}
         <Grades />
-      </div>
+      </ResultColumn>
     </div>
   );
 }
@@ -49,7 +57,7 @@ function Tolerance({ solved, decimalMark }: { solved: SolvedTolerance; decimalMa
   return (
     <Panel
       title="Permissible residual unbalance"
-      note={`G ${formatNumber(solved.gradeMmS, { decimalMark })}`}
+      note={`G ${formatExact(solved.gradeMmS, '', decimalMark)}`}
     >
       <Facts>
         <Fact label="of the whole rotor, U_per">
