@@ -32,6 +32,7 @@ export const routes = {
     spectrum: (recordId: number, query = '') =>
       `/api/internal/readings/${recordId}/spectrum${query}`,
     uploadPreview: (uploadId: number) => `/api/internal/uploads/${uploadId}/preview`,
+    signedRecord: (jobId: number) => `/api/v1/balance-jobs/${jobId}/record`,
     compute: (name: string) => `/api/v1/compute/${name}`,
     openApi: () => '/api/v1/openapi',
     file: (uploadId: number) => `/api/internal/uploads/${uploadId}/file`,

@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { AuditEvent } from '@/entities/audit-event';
@@ -10,6 +11,7 @@ import { lineThroughRun } from '@/lib/server/commands/settle-run';
 import { signJob } from '@/lib/server/commands/sign-job';
 import { stopJob } from '@/lib/server/commands/stop-job';
 import { jobRecord } from '@/lib/server/queries/job-record';
+import { signedRecord } from '@/lib/server/queries/signed-record';
 import { openPlant } from '@/tests/support/open-plant';
 import { seedMachine, type SmallPlant } from '@/tests/support/plant';
 import { JobDriver, valueOf } from './job-driver';
@@ -198,6 +200,9 @@ describe('a job that ends', () => {
     valueOf(await signJob(plant.at('technician'), { ...sign, permanentWeightIds: on }));
     const record = await jobRecord(plant.at('reader'), job.jobId);
     expect(record?.signed?.intact).toBe(true);
+    const file = await signedRecord(plant.at('reader'), job.jobId);
+    expect(file).toMatchObject({ contentHash: record?.signed?.contentHash, statement: 'Done.' });
+    expect(hashAsTheFileSays(file?.content)).toBe(file?.contentHash);
     expect(await job.run('check', [{ amp: 0.3, deg: 10 }])).toMatchObject({
       failure: { code: 'closed' },
     });
@@ -205,6 +210,7 @@ describe('a job that ends', () => {
 
   it('keeps the ledger as it is when it is stopped', async () => {
     const job = await withBase();
+    expect(await signedRecord(plant.at('reader'), job.jobId)).toBeNull();
     valueOf(await job.fit('trial', 0, { g: 20, radius_mm: 700, deg: 0 }));
     valueOf(
       await stopJob(plant.at('technician'), {
@@ -221,6 +227,17 @@ describe('a job that ends', () => {
     expect(sheet.step).toEqual({ step: 'closed' });
   });
 });
+
+/** The hash as the file's own words say it is made, written apart from the product's code. */
+function hashAsTheFileSays(content: unknown): string {
+  const sorted = (value: unknown): string => {
+    if (Array.isArray(value)) return `[${value.map(sorted).join(',')}]`;
+    if (value === null || typeof value !== 'object') return JSON.stringify(value);
+    const entries = Object.entries(value).sort(([one], [other]) => (one < other ? -1 : 1));
+    return `{${entries.map(([key, inner]) => `${JSON.stringify(key)}:${sorted(inner)}`).join(',')}}`;
+  };
+  return createHash('sha256').update(sorted(content), 'utf8').digest('hex');
+}
 
 describe('facts', () => {
   it('stay: the database refuses to change a reading, to delete a run, to edit the audit', async () => {

@@ -1,3 +1,4 @@
+import { SignOff } from '@/entities/caution';
 import { Run } from '@/entities/balance-job';
 import { Weight } from '@/entities/weight';
 import { acceptAnswer } from '@/lib/server/commands/accept-answer';
@@ -13,6 +14,7 @@ import { balanceJob } from '@/lib/server/queries/balance-job';
 import { balanceJobs } from '@/lib/server/queries/balance-jobs';
 import { jobRecord } from '@/lib/server/queries/job-record';
 import { newBalanceJob } from '@/lib/server/queries/new-balance-job';
+import { signedRecord } from '@/lib/server/queries/signed-record';
 import type { OtherSiteCase } from '@/tests/support/other-site';
 import type { SmallPlant } from '@/tests/support/plant';
 import { JobDriver, valueOf } from '../balance-job/job-driver';
@@ -170,6 +172,27 @@ export const cases: OtherSiteCase[] = [
     name: 'jobRecord',
     expects: 'null',
     run: async (foreigner, plant) => jobRecord(foreigner, (await homeJob(plant)).jobId),
+  },
+  {
+    name: 'signedRecord',
+    expects: 'null',
+    run: async (foreigner, plant, em) => {
+      const { jobId } = await homeJob(plant);
+      const { personId, name } = plant.at('technician');
+      em.create(SignOff, {
+        job: jobId,
+        person: personId,
+        personName: name,
+        role: 'technician',
+        statement: 'Done.',
+        at: new Date(),
+        contentHash: '0'.repeat(64),
+        content: {},
+      });
+      await em.flush();
+      if (!(await signedRecord(plant.at('reader'), jobId))) throw new Error('nothing to hide');
+      return signedRecord(foreigner, jobId);
+    },
   },
   {
     name: 'newBalanceJob',

@@ -45,7 +45,7 @@ export default async function JobRecordPage({ params }: Props) {
         title={`Job record ${job.number}: ${job.machine.tag} ${job.machine.name}`}
         crumbs={crumbs}
         note="Angles: degrees against rotation from the mark. Phase: lag, the turn from the mark at the tacho to the next positive peak."
-        actions={<PrintButton />}
+        actions={<TakeAway jobId={job.id} isSigned={record.signed !== null} />}
       />
       {record.signed?.intact === false && (
         <Notice kind="failure">
@@ -81,6 +81,19 @@ export default async function JobRecordPage({ params }: Props) {
       <CautionsTable cautions={record.cautions} timeZone={job.site.timeZone} />
       <SignOffStrip job={job} areaOwner={record.signed?.areaOwner ?? null} />
       <p className="text-xs text-ink-soft">{STANDING_SENTENCE}</p>
+    </>
+  );
+}
+
+function TakeAway({ jobId, isSigned }: { jobId: number; isSigned: boolean }) {
+  return (
+    <>
+      <PrintButton />
+      {isSigned && (
+        <a className="link" href={routes.api.signedRecord(jobId)} download>
+          As JSON
+        </a>
+      )}
     </>
   );
 }
