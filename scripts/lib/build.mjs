@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
-import { causeOf } from './causes.mjs';
+import { causeOf, fullDisk } from './causes.mjs';
 import { ROOT } from './places.mjs';
 import { run } from './run.mjs';
 import { Stop, say } from './say.mjs';
@@ -51,7 +51,8 @@ async function keepingTypeSettings(action) {
 }
 
 function buildSentence(output) {
-  if (/ENOSPC|No space left on device|EDQUOT|EACCES/.test(output)) return causeOf(output);
+  const cause = /EACCES/.test(output) ? causeOf(output) : fullDisk(output);
+  if (cause) return cause;
   if (/heap out of memory|SIGKILL/.test(output))
     return 'The product could not be built: the machine ran out of memory. Free about 2 GB, then run the command again.';
   const last = output.trim().split('\n').slice(-40).join('\n');

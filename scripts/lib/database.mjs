@@ -1,5 +1,5 @@
 import { existsSync } from 'node:fs';
-import { causeOf, tellingLine } from './causes.mjs';
+import { causeOf, fullDisk, tellingLine } from './causes.mjs';
 import { ROOT } from './places.mjs';
 import { postgresPrograms } from './postgres.mjs';
 import { run } from './run.mjs';
@@ -65,6 +65,8 @@ async function ask(url, sql) {
 function databaseSentence(url, output) {
   const { host, pathname, username } = new URL(url);
   const name = pathname.slice(1);
+  const full = fullDisk(output);
+  if (full) return full;
   if (/ECONNREFUSED|ENOTFOUND|EAI_AGAIN|ETIMEDOUT|EHOSTUNREACH|Connection terminated/.test(output))
     return `No database server answers at ${host}. Check DATABASE_URL and that the server runs, then run the command again.`;
   if (/authentication failed|28P01|28000|no pg_hba.conf/.test(output))
