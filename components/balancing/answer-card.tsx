@@ -67,7 +67,9 @@ function Weights({ job, answer }: AnswerCardProps) {
             </Td>
             <Td numeric>{formatQuantity(plane.radiusMm, 'mm', { decimalMark: mark })}</Td>
             <Td numeric>{formatQuantity(plane.forceN, 'N', { decimalMark: mark })}</Td>
-            <Td numeric>{uncertainty(plane.uncertaintyG, plane.uncertaintyDeg, mark)}</Td>
+            <Td numeric className="whitespace-normal!">
+              {uncertainty(plane.uncertaintyG, plane.uncertaintyDeg, mark)}
+            </Td>
             <Td numeric>
               {formatMass(plane.totalMassG, mark)} at {formatDegrees(plane.totalAngleDeg, 1, mark)}
             </Td>

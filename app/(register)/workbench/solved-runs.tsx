@@ -70,12 +70,14 @@ export function SolvedRunsPanels({ solved, decimalMark }: SolvedRunsPanelsProps)
 function ForceShares({ solved, decimalMark }: SolvedRunsPanelsProps) {
   const known = solved.planes.flatMap(({ name }, index) => {
     const pct = solved.forcePctOfRotorWeight[index] ?? null;
-    return pct === null
-      ? []
-      : [`in plane ${name} ${formatQuantity(pct, '%', { decimalMark })} of the rotor’s weight`];
+    return pct === null ? [] : [`plane ${name}: ${formatQuantity(pct, '%', { decimalMark })}`];
   });
   if (known.length === 0) return null;
-  return <p className="text-sm">The force of the weight at this speed: {known.join('; ')}.</p>;
+  return (
+    <p className="text-sm">
+      Force at this speed against the weight of the rotor: {known.join(', ')}.
+    </p>
+  );
 }
 
 function weightsOf({ staying, answer }: SolvedRuns, planeId: number): FaceWeight[] {
