@@ -1,7 +1,13 @@
 import { Notice } from '@/components/ui/notice';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { countedInSense } from '@/lib/domain/balancing/convert-angle';
-import { formatDegrees, formatMass, formatQuantity, type DecimalMark } from '@/lib/format';
+import {
+  formatDegrees,
+  formatMass,
+  formatQuantity,
+  NOT_KNOWN,
+  type DecimalMark,
+} from '@/lib/format';
 import type { AnswerDto } from '@/lib/schemas/balance-job';
 import type { AnswerGround } from './answer-ground';
 import { Expected } from './expected-readings';
@@ -81,6 +87,6 @@ function Weights({ job, answer }: AnswerCardProps) {
 }
 
 function uncertainty(grams: number | null, degrees: number | null, mark: DecimalMark): string {
-  if (grams === null || degrees === null) return 'not known: one base run';
+  if (grams === null || degrees === null) return NOT_KNOWN;
   return `± ${formatMass(grams, mark)}, ± ${formatDegrees(degrees, 0, mark)}`;
 }
