@@ -117,7 +117,7 @@ function fitNotices(input: JobInput, solution: Known): JobNotice[] {
   if (allRuns && scatter > 0 && allRuns.misfitRms > MISFIT_PER_SCATTER * scatter)
     notices.push({
       code: 'misfit',
-      message: `Over all runs the fit misses by ${allRuns.misfitRms.toFixed(3)} ${input.unit} rms, more than 3 times the scatter of ${scatter.toFixed(3)}; ${nameOf(input, allRuns.worstRunId)} fits worst. Check the weights entered for it.`,
+      message: `Over all runs the fit misses by ${allRuns.misfitRms.toFixed(3)} ${input.unit}, more than 3 times the scatter of ${scatter.toFixed(3)}; ${nameOf(input, allRuns.worstRunId)} fits worst. Check the weights entered for it.`,
     });
   const trialRuns = new Set(solution.model.source === 'stored' ? [] : solution.model.runIds);
   for (const e of estimates.filter(({ runId }) => !trialRuns.has(runId))) {
