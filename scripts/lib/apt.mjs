@@ -11,12 +11,15 @@ export async function aptInstall(packages, what, before = '') {
   const prefix = await rights(what, names);
   say(`Installing ${what} from Debian’s packages (${names}); this can take a few minutes …`);
   if (before) await as(prefix, ['sh', '-c', before], what, names);
+  // An install cut short, by a power cut say, has to be finished first; else this does nothing.
+  await attempt([...prefix, ...QUIETLY, 'dpkg', '--configure', '-a']);
   // A first list of packages that fails still may leave what is needed within reach.
-  await run(...split([...prefix, ...APT, 'update']));
+  await attempt([...prefix, ...APT, 'update']);
   await as(prefix, [...APT, 'install', '-y', '--no-install-recommends', ...packages], what, names);
 }
 
-const APT = ['env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get', '-o', 'DPkg::Lock::Timeout=300'];
+const QUIETLY = ['env', 'DEBIAN_FRONTEND=noninteractive'];
+const APT = [...QUIETLY, 'apt-get', '-o', 'DPkg::Lock::Timeout=300'];
 
 async function rights(what, names) {
   if (!(await has('apt-get')))
@@ -31,7 +34,7 @@ async function rights(what, names) {
 }
 
 async function as(prefix, command, what, names) {
-  const { code, output } = await run(...split([...prefix, ...command]));
+  const { code, output } = await attempt([...prefix, ...command]);
   if (code === 0) return;
   if (/a (terminal|password) is required|not in the sudoers|not allowed to/i.test(output))
     throw new Stop(
@@ -47,6 +50,7 @@ async function as(prefix, command, what, names) {
   );
 }
 
-function split([program, ...args]) {
-  return [program, args];
+/** Where this run is killed, the install goes on; the next one waits for it. */
+function attempt([program, ...args]) {
+  return run(program, args, { outlives: true });
 }
