@@ -1,6 +1,7 @@
 import { existsSync, mkdirSync, readFileSync } from 'node:fs';
 import { buildIfStale } from './lib/build.mjs';
 import { checkNode } from './lib/check-node.mjs';
+import { checkPlace } from './lib/check-place.mjs';
 import { startCluster } from './lib/cluster.mjs';
 import { ensureDatabase, migrate, seedIfEmpty } from './lib/database.mjs';
 import { ensureNpmPackages } from './lib/npm-packages.mjs';
@@ -16,6 +17,7 @@ const BEGUN = Date.now();
 
 await runMain(async () => {
   checkNode();
+  checkPlace();
   const development = process.argv.includes('--dev');
   const port = webPort();
   mkdirSync(DATA, { recursive: true });

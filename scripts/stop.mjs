@@ -9,7 +9,7 @@ await runMain(async () => {
   const stopped = await stopCluster(DATA);
   say(
     stopped
-      ? 'The database of this project has stopped; its data stays in .data.'
+      ? 'The database of this project has stopped; its data is kept.'
       : 'No database of this project was running.',
   );
 });

@@ -1,4 +1,5 @@
 import { checkNode } from './lib/check-node.mjs';
+import { checkPlace } from './lib/check-place.mjs';
 import { ensureChromium } from './lib/chromium.mjs';
 import { ensureNpmPackages } from './lib/npm-packages.mjs';
 import { ensurePostgres } from './lib/postgres.mjs';
@@ -14,6 +15,7 @@ const total = { passed: 0, failed: 0, skipped: 0 };
 
 await runMain(async () => {
   checkNode();
+  checkPlace();
   const stages = wantedStages();
   const needsDatabase = stages.some((stage) => WITH_DATABASE.includes(stage));
   if (needsDatabase) await ensurePostgres();
