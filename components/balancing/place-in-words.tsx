@@ -20,7 +20,7 @@ export function PlaceInWords({ plane, setup, angleDeg, decimalMark }: PlaceInWor
   const words = positionWords(angleDeg, plane.positions);
   return (
     <p>
-      Plane {plane.name}: turn{' '}
+      Plane {plane.name}: count{' '}
       <strong className="figures">
         {formatDegrees(angleDeg, 1, decimalMark)} against rotation
       </strong>{' '}

@@ -26,7 +26,9 @@ export function CheckField({
   const id = useId();
   const error = errorOf(state, name);
   const typed = typedOf(state);
-  const ticked = typed ? typed[name] === String(rest.value ?? 'on') : defaultChecked;
+  const ticked = typed
+    ? (typed[name] ?? '').split('\n').includes(String(rest.value ?? 'on'))
+    : defaultChecked;
   const start = rest.checked === undefined ? { defaultChecked: ticked } : {};
   return (
     <div>

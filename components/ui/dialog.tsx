@@ -22,6 +22,7 @@ export function Dialog({ title, trigger, description, open, onOpenChange, childr
         <Radix.Overlay className="fixed inset-0 z-40 bg-black/50" />
         <Radix.Content
           {...(description === undefined ? { 'aria-describedby': undefined } : {})}
+          onOpenAutoFocus={focusFirstField}
           className="fixed top-[10vh] left-1/2 z-50 max-h-[80vh] w-[min(34rem,calc(100vw-2rem))] -translate-x-1/2 overflow-y-auto rounded border border-rule bg-sheet p-5 shadow-xl"
         >
           <div className="mb-3 flex items-start justify-between gap-4">
@@ -41,4 +42,14 @@ export function Dialog({ title, trigger, description, open, onOpenChange, childr
       </Radix.Portal>
     </Radix.Root>
   );
+}
+
+/** What is typed first has the focus, not the button that closes. */
+function focusFirstField(event: Event) {
+  const content = event.currentTarget;
+  if (!(content instanceof HTMLElement)) return;
+  const field = content.querySelector<HTMLElement>('input:not([type="hidden"]), select, textarea');
+  if (!field) return;
+  event.preventDefault();
+  field.focus();
 }

@@ -4,12 +4,14 @@ export type Result<Value, F extends Failure = Failure> =
 
 /**
  * An expected failure. `code` is a literal that programs act on, `message` the sentence a person
- * reads (cause and remedy), `field` the input it belongs to, dotted for nested inputs.
+ * reads (cause and remedy), `field` the input it belongs to, dotted for nested inputs; `more` what is
+ * wrong besides, where several inputs are.
  */
 export type Failure<Code extends string = string> = {
   readonly code: Code;
   readonly message: string;
   readonly field?: string;
+  readonly more?: readonly Failure[];
 };
 
 /** Wraps a value as a success. */

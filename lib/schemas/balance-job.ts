@@ -195,6 +195,22 @@ export type CheckVerdict = {
 /** One slip supposed, and how far the check run would be from what it makes expected. */
 export type SlipExplanation = Pick<SlipTest, 'slip' | 'words' | 'miss' | 'inside'>;
 
+/** A plane as asked for and as recorded, as one weight at the plane's radius, against rotation. */
+export type AsFittedPlane = {
+  planeName: string;
+  askedG: number;
+  askedDeg: number;
+  fittedG: number;
+  fittedDeg: number;
+  isFar: boolean;
+};
+
+export type AsFittedDto = {
+  planes: AsFittedPlane[];
+  /** What the points should read with everything as recorded. */
+  expected: { label: string; amplitude: number; lagDeg: number }[];
+};
+
 export type TrialProposalDto = {
   planeId: number;
   massG: number;
@@ -242,6 +258,8 @@ export type BalanceJobDto = {
   /** What the arithmetic says now: an answer to accept, or why there is none. */
   answer: AnswerDto | null;
   answerFailure: string | null;
+  /** Between fitting and the check run: what was recorded beside what was asked for. */
+  asFitted: AsFittedDto | null;
   check: CheckVerdict | null;
   /** What may have gone wrong, best explanation first; empty where the check run was as predicted. */
   slips: SlipExplanation[];

@@ -28,7 +28,12 @@ export function action<Schema extends z.ZodType, Value>(
       return { status: 'ok', value: result.value, values: typedValues(form) };
     if (result.ok) return { status: 'ok', value: result.value };
     const { failure } = result;
-    return { status: 'failed', failure, failures: [failure], values: typedValues(form) };
+    return {
+      status: 'failed',
+      failure,
+      failures: [failure, ...(failure.more ?? [])],
+      values: typedValues(form),
+    };
   };
 }
 

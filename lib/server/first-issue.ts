@@ -2,10 +2,12 @@ import 'server-only';
 import type { z } from 'zod';
 import type { Failure } from '@/lib/domain/result';
 
-/** The first thing wrong with an input, with the dotted path of its field. */
+/** Everything wrong with an input, each with the dotted path of its field; the first leads. */
 export function firstIssue(error: z.ZodError): Failure {
-  const issue = error.issues[0];
-  const field = issue?.path.map(String).join('.');
-  const message = issue?.message ?? 'The input could not be read.';
-  return field ? { code: 'input', message, field } : { code: 'input', message };
+  const [first = { code: 'input', message: 'The input could not be read.' }, ...more] =
+    error.issues.map(({ path, message }): Failure => {
+      const field = path.map(String).join('.');
+      return field === '' ? { code: 'input', message } : { code: 'input', message, field };
+    });
+  return more.length === 0 ? first : { ...first, more };
 }

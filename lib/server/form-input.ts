@@ -16,13 +16,17 @@ export function formToInput(form: FormData): unknown {
   return arraysWhereNumbered(root);
 }
 
-/** Every text of the form by its name, to show again after a failure; a password is never sent back. */
+/**
+ * Every text of the form by its name, to show again after a failure: several of one name stand in lines. A
+ * password is never sent back.
+ */
 export function typedValues(form: FormData): Record<string, string> {
   const values: Record<string, string> = {};
   for (const [name, value] of form.entries()) {
     if (typeof value !== 'string' || name.startsWith('$ACTION') || /password$/i.test(name))
       continue;
-    values[name] = value;
+    const before = values[name];
+    values[name] = before === undefined ? value : `${before}\n${value}`;
   }
   return values;
 }

@@ -13,6 +13,13 @@ describe('what a failed form hands back', () => {
     expect(typedValues(form(typed))).toEqual({ name: 'Ann', 'siteIds.7': '7' });
   });
 
+  it('is every tick of a name, in lines', () => {
+    const data = form({ reason: '' });
+    data.append('planeIds', '3');
+    data.append('planeIds', '5');
+    expect(typedValues(data)).toEqual({ reason: '', planeIds: '3\n5' });
+  });
+
   it('while the command is given the password, and ticks as a list', () => {
     const typed = { password: 'three plain words', 'siteIds.7': '7', 'siteIds.12': '12' };
     expect(formToInput(form(typed))).toEqual({

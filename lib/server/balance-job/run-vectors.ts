@@ -84,6 +84,8 @@ async function fromRecord(
   });
   if (!vector)
     return fail('no-vector', 'This record has no kept 1x vector at this point.', 'recordId');
+  const stale = notOfThisRun(loaded, vector);
+  if (stale) return stale;
   const lag = vector.lagDeg;
   if (lag === null || lag === undefined)
     return fail('no-phase', 'This record had no tacho, so it has a size but no phase.', 'recordId');
@@ -101,4 +103,36 @@ async function fromRecord(
     entered: null,
     recordId: typed.recordId,
   });
+}
+
+/** A record shows what hung on the rotor when it was taken, and belongs to one run only. */
+function notOfThisRun(loaded: LoadedJob, vector: OneXVector): Result<never> | null {
+  if (vector.takenAt < rotorAsItIsSince(loaded))
+    return fail(
+      'older-than-weights',
+      'This record was taken before the weights on the rotor last changed, so it does not show them. Take a new one.',
+      'recordId',
+    );
+  const used = loaded.runs.find(
+    ({ run, vectors }) =>
+      run.state !== 'lined through' &&
+      vectors.some(({ record }) => record?.id === vector.record.id),
+  );
+  if (!used) return null;
+  return fail(
+    'used',
+    `Run ${used.run.number} has its reading from this record already. Every run needs its own.`,
+    'recordId',
+  );
+}
+
+const DAY_MS = 86_400_000;
+
+/** Since when the rotor carries what it carries now: the last weight on or off; a day before the job. */
+export function rotorAsItIsSince({ job, weights }: LoadedJob): Date {
+  const changes = weights.flatMap(({ fittedAt, endedAt }) => [fittedAt, endedAt ?? fittedAt]);
+  return changes.reduce(
+    (latest, at) => (at > latest ? at : latest),
+    new Date(job.openedAt.getTime() - DAY_MS),
+  );
 }

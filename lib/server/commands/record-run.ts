@@ -44,7 +44,7 @@ export const recordRun = command(
     recordCautions(
       em,
       { jobId: job.id, personId: actor.personId, now, step: `before run ${run.number}` },
-      ['SAF-02', 'SAF-03', 'SAF-04'],
+      RUN_CAUTIONS[input.purpose],
       input.namedPerson,
     );
     audit({
@@ -56,6 +56,13 @@ export const recordRun = command(
     return ok({ runId: run.id, number: run.number, held: doubt });
   },
 );
+
+/** What the form of such a run shows: nothing else may stand on the record as confirmed. */
+const RUN_CAUTIONS = {
+  base: ['SAF-04'],
+  trial: ['SAF-02', 'SAF-04'],
+  check: ['SAF-02', 'SAF-04'],
+} as const;
 
 function outOfOrder(loaded: LoadedJob, purpose: 'base' | 'trial' | 'check'): Result<never> | null {
   const { step } = loaded.step;

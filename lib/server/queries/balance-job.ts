@@ -9,11 +9,13 @@ import type { JobSolution } from '@/lib/domain/balancing/job-solution';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
 import type { BalanceJobDto, RunDto } from '@/lib/schemas/balance-job';
 import { answerDto } from '../balance-job/answer-dto';
+import { asFitted } from '../balance-job/as-fitted';
 import { baseRepeats } from '../balance-job/base-repeats';
 import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob, type LoadedRun } from '../balance-job/load-job';
 import { planeDtos, pointDto, setupDto, weightDto, weightsOnRotor } from '../balance-job/places';
+import { rotorAsItIsSince } from '../balance-job/run-vectors';
 import { slipExplanations } from '../balance-job/slip-explanations';
 import { toleranceDto, trialCheckDtos, trialProposal } from '../balance-job/solution-dto';
 import { query } from '../query';
@@ -48,6 +50,7 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     trialProposal: trialProposal(loaded),
     ...arithmeticOf(loaded),
     accepted: acceptedOf(loaded, names),
+    asFitted: asFitted(loaded),
     check,
     slips: slipExplanations(loaded, planes, check),
     signOffs: await signOffsOf(em, job.id),
@@ -177,7 +180,8 @@ async function limitsOf(em: EntityManager, machineId: number): Promise<BalanceJo
 
 const CHOICES_PER_POINT = 5;
 
-async function choicesOf(em: EntityManager, { job, points }: LoadedJob) {
+async function choicesOf(em: EntityManager, loaded: LoadedJob) {
+  const { job, points } = loaded;
   if (job.closedAt) return [];
   const vectors = await em.find(
     OneXVector,
@@ -186,7 +190,7 @@ async function choicesOf(em: EntityManager, { job, points }: LoadedJob) {
       status: 'kept',
       lagDeg: { $ne: null },
       unit: job.unit,
-      takenAt: { $gte: new Date(job.openedAt.getTime() - 86_400_000) },
+      takenAt: { $gte: rotorAsItIsSince(loaded) },
     },
     { orderBy: { takenAt: 'desc' }, limit: 100 },
   );

@@ -102,6 +102,13 @@ describe('a machine entered', () => {
     expect(await create({ tag: 'PN-1', planes: [free] })).toMatchObject({ ok: true });
   });
 
+  it('says everything that is wrong at once', async () => {
+    const result = await create({ tag: '', name: '', powerKw: 'ninety', criticality: 'E' as 'A' });
+    const failure = result.ok ? undefined : result.failure;
+    const fields = [failure, ...(failure?.more ?? [])].map((one) => one?.field);
+    expect(fields).toEqual(['tag', 'name', 'powerKw', 'criticality']);
+  });
+
   it('cannot be entered by a technician', async () => {
     expect(
       await createMachine(plant.at('technician'), newMachine(plant, { tag: 'T-1' })),

@@ -10,10 +10,16 @@ import { StepForm } from './step-form';
 /** The answer to look at and accept, or in words why there is none. */
 export function AnswerStep({ job }: { job: BalanceJobDto }) {
   const { answer } = job;
+  // After a check run that leaves nothing to correct, no answer is good news.
+  const afterCheck = job.step.step === 'decide';
   return (
     <div className="flex flex-col gap-4">
       <TrialResponses checks={job.trialChecks} decimalMark={job.site.decimalMark} />
-      {job.answerFailure !== null && <Notice kind="failure">{job.answerFailure}</Notice>}
+      {job.answerFailure !== null && (
+        <Notice kind={afterCheck ? 'info' : 'failure'} title={afterCheck ? 'No trim' : undefined}>
+          {job.answerFailure}
+        </Notice>
+      )}
       {answer && (
         <>
           <AnswerCard job={job} answer={answer} />

@@ -46,15 +46,23 @@ function Repeats({ job }: { job: BalanceJobDto }) {
             {test ? (
               <span className="figures">
                 mean {formatQuantity(test.meanAmplitude, job.unit)} at {formatLag(test.meanLagDeg)},
-                scatter {formatQuantity(test.scatter, job.unit)}
+                scatter {formatQuantity(test.scatter < SAME ? 0 : test.scatter, job.unit)}
               </span>
             ) : (
               'one run, scatter not known'
             )}
-            {test && (test.good ? ': repeats well' : ': does not repeat')}
+            {test && `: ${repeatWords(test)}`}
           </li>
         );
       })}
     </ul>
   );
+}
+
+/** Readings closer than this are one reading typed again, or a display that holds its value. */
+const SAME = 1e-9;
+
+function repeatWords({ scatter, good }: { scatter: number; good: boolean }): string {
+  if (scatter < SAME) return 'the very same each time: was each one read anew?';
+  return good ? 'repeats well' : 'does not repeat';
 }

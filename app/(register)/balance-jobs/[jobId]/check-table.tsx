@@ -41,7 +41,14 @@ export function CheckTable({ job }: { job: BalanceJobDto }) {
   );
 }
 
-function verdictOf(point: { miss: number | null; band: number | null }): string {
+type Verdict = { miss: number | null; band: number | null; reductionPct: number };
+
+function verdictOf(point: Verdict): string {
+  const expected = expectationOf(point);
+  return point.reductionPct < 0 ? `worse than the base; ${expected}` : expected;
+}
+
+function expectationOf(point: Verdict): string {
   if (point.miss === null) return 'no prediction';
   if (point.band === null) return 'band not known';
   return point.miss <= point.band ? 'as predicted' : 'not as predicted: look for a slip';

@@ -1,10 +1,12 @@
 'use client';
 
 import { AnswerCard } from '@/components/balancing/answer-card';
+import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
 import { formatDegrees, formatMass, formatNumber, formatQuantity } from '@/lib/format';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import { AnswerStep } from './answer-step';
+import { AsFittedPanel } from './as-fitted-panel';
 import { BaseStep } from './base-step';
 import { CheckTable } from './check-table';
 import { RunForm } from './run-form';
@@ -94,6 +96,7 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
           )
         );
       })}
+      <AsFittedPanel job={job} />
       {fitted && (
         <Panel
           title={planeIds.length === 0 ? 'Next: check run' : 'or, if nothing goes there: check run'}
@@ -111,6 +114,12 @@ function Decide({ job }: { job: BalanceJobDto }) {
       <Panel title="Check run">
         <CheckTable job={job} />
       </Panel>
+      {job.check?.points.some(({ reductionPct }) => reductionPct < 0) && (
+        <Notice kind="failure" title="It runs rougher than before">
+          Stop and look at what hangs where before anything else: a weight on the wrong side does
+          this. Do not leave it so.
+        </Notice>
+      )}
       <SlipsPanel job={job} />
       <Panel title="Good enough? Sign the job record">
         <SignForm job={job} />

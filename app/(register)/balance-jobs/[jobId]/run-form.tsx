@@ -6,7 +6,13 @@ import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { SelectField } from '@/components/ui/select-field';
 import { CAUTIONS } from '@/lib/domain/cautions';
-import { formatDateTime, formatForInput, formatLag, formatQuantity } from '@/lib/format';
+import {
+  formatDateTime,
+  formatForInput,
+  formatLag,
+  formatPlural,
+  formatQuantity,
+} from '@/lib/format';
 import type { ActionState } from '@/lib/schemas/action-state';
 import type { BalanceJobDto, PointDto } from '@/lib/schemas/balance-job';
 import { AMPLITUDE_UNITS } from '@/lib/schemas/balance-job-input';
@@ -36,6 +42,7 @@ export function RunForm({ job, purpose, button }: RunFormProps) {
       {(state) => (
         <>
           <input type="hidden" name="purpose" value={purpose} />
+          <Starts job={job} />
           <StartCaution state={state} purpose={purpose} />
           <div className="grid gap-4 sm:grid-cols-2">
             <Field
@@ -112,6 +119,20 @@ function PointReading({ job, point, index, state }: PointReadingProps) {
         </div>
       )}
     </fieldset>
+  );
+}
+
+/** How many starts the machine is allowed, and which this one is. */
+function Starts({ job }: { job: BalanceJobDto }) {
+  const { startsAllowed, runs } = job;
+  if (startsAllowed === null) return null;
+  const next = runs.length + 1;
+  const words = `This is start ${next}; ${formatPlural(startsAllowed, 'start')} were agreed.`;
+  if (next <= startsAllowed) return <p>{words}</p>;
+  return (
+    <Notice kind="caution" title={words}>
+      Ask whoever is responsible for the machine before it is started again.
+    </Notice>
   );
 }
 

@@ -51,7 +51,7 @@ export function RunsTable({ job, may }: RunsTableProps) {
             <Td>
               {weightsOf(job, run)}
               {run.stateReason && (
-                <span className="block text-xs">
+                <span className="inline-block text-xs">
                   {run.state}: {run.stateReason}
                 </span>
               )}

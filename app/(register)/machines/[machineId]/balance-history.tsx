@@ -14,6 +14,7 @@ import {
 } from '@/lib/format';
 import { routes } from '@/lib/routes';
 import type { LedgerPlane, MachinePageDto } from '@/lib/schemas/register';
+import { isTrial } from './is-trial';
 
 /** Jobs, what hangs on the rotor, and what was learned: the coefficient book. */
 export function BalanceHistory({ machine }: { machine: MachinePageDto }) {
@@ -85,7 +86,7 @@ function PlaneLedger({ machine, plane }: { machine: MachinePageDto; plane: Ledge
             massG: weight.massG,
             angleDeg: weight.angleDeg,
             label: formatDate(weight.fittedAt, machine.site.timeZone),
-            state: 'on' as const,
+            state: isTrial(weight) ? ('trial' as const) : ('on' as const),
           }))}
         />
       )}

@@ -3,6 +3,7 @@ import { Value } from '@/components/ui/value';
 import { ZoneStamp } from '@/components/ui/zone-stamp';
 import { formatDays, formatLag, formatMass, formatPlural, formatQuantity } from '@/lib/format';
 import type { MachinePageDto } from '@/lib/schemas/register';
+import { isTrial } from './is-trial';
 
 /** The first line of the sheet: zone, worst point, 1x, weights, days since balance. */
 export function HeadFacts({ machine }: { machine: MachinePageDto }) {
@@ -52,7 +53,9 @@ function weightsOf({ planes, site }: MachinePageDto): string {
   const weights = planes.flatMap((plane) => plane.weights);
   if (weights.length === 0) return 'none recorded';
   const total = weights.reduce((sum, { massG }) => sum + massG, 0);
-  return `${formatPlural(weights.length, 'weight')}, ${formatMass(total, site.decimalMark)}`;
+  const said = `${formatPlural(weights.length, 'weight')}, ${formatMass(total, site.decimalMark)}`;
+  const trials = weights.filter(isTrial).length;
+  return trials === 0 ? said : `${said}, of which ${formatPlural(trials, 'trial weight')}`;
 }
 
 function identityOf({ kind, nominalSpeedRpm, powerKw, criticality }: MachinePageDto): string {

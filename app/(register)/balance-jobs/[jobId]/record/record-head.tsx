@@ -32,6 +32,7 @@ export function RecordHead({ job }: { job: BalanceJobDto }) {
         <Fact label="job">
           {job.kind}, {job.unit}
         </Fact>
+        <Fact label="targets">{targetsOf(job)}</Fact>
         <Fact label="typed as">
           phase {job.phaseSense}, degrees {job.angleSense} rotation
         </Fact>
@@ -46,4 +47,16 @@ export function RecordHead({ job }: { job: BalanceJobDto }) {
       {job.closingNote && <p className="whitespace-pre-line">Closing note: {job.closingNote}</p>}
     </Panel>
   );
+}
+
+function targetsOf({ targets, unit, rotor, site }: BalanceJobDto): string {
+  const { decimalMark } = site;
+  const said = [
+    targets.oneX === null
+      ? null
+      : `1x below ${formatQuantity(targets.oneX, unit, { decimalMark })}`,
+    targets.zone === null ? null : `overall in zone ${targets.zone} or better`,
+    targets.grade ? `estimate within G ${rotor.grade === null ? NOT_KNOWN : rotor.grade}` : null,
+  ].filter((one) => one !== null);
+  return said.length === 0 ? 'none set' : said.join('; ');
 }
