@@ -75,7 +75,7 @@ function CardFacts({ card, view }: DueCardItemProps) {
       <Fact label={`overall, ${card.pointLabel}`}>
         <Value amount={standing.latest.value} unit="mm/s" detection="rms" options={options} />
       </Fact>
-      <Fact label="1x share of the energy">
+      <Fact label="1x share of the energy, latest">
         <Value
           amount={card.oneXShare === null ? null : 100 * card.oneXShare}
           unit="%"

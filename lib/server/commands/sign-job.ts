@@ -60,6 +60,11 @@ function notReady(loaded: LoadedJob, input: Input): Result<never> | null {
   if (loaded.step.step === 'closed') return fail('closed', 'This job is closed already.');
   if (loaded.step.step !== 'decide')
     return fail('no-check', 'A job is signed after a check run with the weights as they stay.');
+  if (hasChangedSinceCheck(loaded))
+    return fail(
+      'changed-since-check',
+      'The weights on the rotor changed after the last check run. Take another check run, then sign.',
+    );
   const temporary = loaded.weights.filter(
     ({ id, endedAt, permanent }) =>
       endedAt === null && !permanent && !input.permanentWeightIds.includes(id),
@@ -81,6 +86,13 @@ function notReady(loaded: LoadedJob, input: Input): Result<never> | null {
   return null;
 }
 
+function hasChangedSinceCheck({ runs, weights }: LoadedJob): boolean {
+  const check = runs.findLast(({ run }) => run.purpose === 'check' && run.state === 'kept');
+  const checked = new Set(check?.run.weightsState.map(({ weightId }) => weightId));
+  const on = weights.filter(({ endedAt }) => endedAt === null);
+  return on.length !== checked.size || on.some(({ id }) => !checked.has(id));
+}
+
 function missedTargets(loaded: LoadedJob): string[] {
   const check = checkVerdict(loaded);
   if (!check) return [];
@@ -90,7 +102,9 @@ function missedTargets(loaded: LoadedJob): string[] {
   const off = check.points.filter(
     ({ miss, band }) => miss !== null && band !== null && miss > band,
   );
+  const worse = check.points.filter(({ reductionPct }) => reductionPct < 0);
   return [
+    ...(worse.length > 0 ? [`It runs rougher than before at ${labels(worse)}.`] : []),
     ...(above.length > 0
       ? [`The 1x target of ${target} ${job.unit} is missed at ${labels(above)}.`]
       : []),

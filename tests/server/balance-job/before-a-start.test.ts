@@ -4,6 +4,8 @@ import { CautionShown } from '@/entities/caution';
 import { LimitSet } from '@/entities/limit-set';
 import { OneXVector } from '@/entities/measured-record';
 import { Site } from '@/entities/site';
+import { signJob } from '@/lib/server/commands/sign-job';
+import { takeOffWeight } from '@/lib/server/commands/settle-weight';
 import { recordRun } from '@/lib/server/commands/record-run';
 import { near } from '@/tests/domain/balancing/near';
 import { openPlant } from '@/tests/support/open-plant';
@@ -77,6 +79,52 @@ describe('between fitting and the check run', () => {
       BASE.amp * 2 * Math.abs(Math.cos(apart / 2)),
       1e-6,
     );
+  });
+});
+
+describe('signing', () => {
+  const sign = (job: JobDriver, weightIds: number[], reason = '') =>
+    signJob(job.actor, {
+      jobId: job.jobId,
+      statement: 'Done.',
+      permanentWeightIds: weightIds,
+      handBack: 'on',
+      areaOwner: 'Marta Lind',
+      reason,
+    });
+
+  it('asks for another check run where a weight came off after the last', async () => {
+    const job = await answered();
+    const { planes } = await job.accept();
+    const { massG: g = 0, angleDeg: deg = 0 } = planes[0] ?? {};
+    valueOf(await job.fit('correction', 0, { g, radius_mm: 700, deg }));
+    valueOf(await job.run('check', [{ amp: 0.1, deg: 10 }]));
+    const weightId = (await job.sheet()).weights.find(({ endedAt }) => endedAt === null)?.id ?? 0;
+    valueOf(
+      await takeOffWeight(job.actor, {
+        jobId: job.jobId,
+        weightId,
+        reason: 'The clamp slipped.',
+        standingStill: 'on',
+        namedPerson: 'Ida Berg',
+      }),
+    );
+    const failure = { ok: false, failure: { code: 'changed-since-check' } };
+    expect(await sign(job, [])).toMatchObject(failure);
+    valueOf(await job.run('check', [{ amp: 3.4, deg: 120 }]));
+    expect(await sign(job, [], 'Left as found.')).toMatchObject({ ok: true });
+  });
+
+  it('asks why where it runs rougher than before', async () => {
+    const job = await answered();
+    const { planes } = await job.accept();
+    const { massG: g = 0, angleDeg: deg = 0 } = planes[0] ?? {};
+    valueOf(await job.fit('correction', 0, { g, radius_mm: 700, deg, sense: 'with' }));
+    valueOf(await job.run('check', [{ amp: 6, deg: 30 }]));
+    const on = (await job.sheet()).weights.flatMap(({ id, endedAt }) => (endedAt ? [] : [id]));
+    const refused = await sign(job, on);
+    expect(refused).toMatchObject({ failure: { code: 'reason-needed', field: 'reason' } });
+    expect(refused.ok ? '' : refused.failure.message).toContain('rougher than before at A-H');
   });
 });
 
