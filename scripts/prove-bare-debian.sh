@@ -1,5 +1,6 @@
 #!/usr/bin/env bash
-# Proves "npm start" and "npm test" in a Debian 12 root that has only Node.js in it. Run as root:
+# Proves "npm start", "npm run dev", "npm run stop" and "npm test" in a Debian 12 root that has only Node.js in it.
+# Run as root:
 #   scripts/prove-bare-debian.sh [folder]        (default: /tmp/evenrun-bare; kept at the end, to look at)
 # Needs debootstrap, git and curl here; Node.js 20, npm's settings, the package sources and certificates are this machine's.
 # AS=plain does the same as a user with sudo instead of root.
@@ -10,6 +11,7 @@ bare=${1:-/tmp/evenrun-bare}
 port=${PORT:-3456}
 who=root
 packages=ca-certificates
+verdict=0
 if [ "${AS:-root}" = plain ]; then
   who=tester
   packages=ca-certificates,sudo
@@ -22,11 +24,17 @@ main() {
   copy_reach
   copy_project
   echo "== Before: PostgreSQL and Chromium are $(inside 'ls -d /usr/lib/postgresql /usr/bin/chromium' 2>/dev/null || echo absent)"
-  start_once cold
-  start_once warm
+  begin "npm start" "cold"
+  interrupt
+  begin "npm start" "warm, the database runs"
+  stop
+  begin "npm run dev" "the database stopped"
+  interrupt
   step "npm test" inside 'npm test'
-  step "npm test again" inside 'npm test'
-  inside 'npm run --silent stop'
+  begin "npm start" "beside the next test"
+  step "npm test again, beside npm start" inside 'npm test'
+  answers || fail "npm start no longer answers"
+  stop
 }
 
 make_root() {
@@ -88,27 +96,59 @@ home() {
   if [ "$who" = root ]; then echo /root; else echo "/home/$who"; fi
 }
 
+# Goes on where a check fails; the proof then fails as a whole.
 step() {
   echo "== $1"
   shift
   local begun=$SECONDS
-  "$@" || echo "== failed with code $?"
+  if ! "$@"; then
+    echo "== failed"
+    verdict=1
+  fi
   echo "== took $((SECONDS - begun)) s"
 }
 
-# Starts the product, waits until it answers, looks at the sign-in page, and stops it with the signal of Ctrl-C.
-start_once() {
-  echo "== npm start, $1"
+# Starts the product, and waits until its sign-in page answers.
+begin() {
+  echo "== $1, $2"
   local begun=$SECONDS
-  inside 'npm start' &
-  local started=$!
-  until curl -fs "http://127.0.0.1:$port/sign-in" >/dev/null; do
-    kill -0 "$started" 2>/dev/null || { echo "== npm start ended early"; exit 1; }
+  inside "$1" &
+  started=$!
+  until answers; do
+    kill -0 "$started" 2>/dev/null || fail "$1 ended early"
     sleep 1
   done
   echo "== the sign-in page answers after $((SECONDS - begun)) s"
-  inside "kill -INT \$(sed 's/.*\"pid\":\\([0-9]*\\).*/\\1/' .data/start.lock)"
-  wait "$started" || true
 }
 
-main
+answers() {
+  curl -fs "http://127.0.0.1:$port/sign-in" >/dev/null
+}
+
+# Ends it with the signal of Ctrl-C; the database runs on.
+interrupt() {
+  inside "kill -INT \$(sed 's/.*\"pid\":\\([0-9]*\\).*/\\1/' .data/start.lock)"
+  ended
+}
+
+# Ends it and the database; neither may answer any more.
+stop() {
+  inside 'npm run --silent stop'
+  ended
+  if (: <>"/dev/tcp/127.0.0.1/$(cat "$bare/srv/evenrun/.data/pg-port")") 2>/dev/null; then
+    fail "the database still answers"
+  fi
+}
+
+ended() {
+  wait "$started" || true
+  if answers; then fail "the web server still answers"; fi
+}
+
+fail() {
+  echo "== failed: $1"
+  exit 1
+}
+
+# On one line, so that bash has read it whole before the script may be changed under it.
+main; exit "$verdict"
