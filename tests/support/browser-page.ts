@@ -23,6 +23,8 @@ export async function openPage(
 
 /** Fails with what axe-core finds against WCAG 2.1 A and AA, one line a finding. */
 export async function expectAccessible(page: Page): Promise<void> {
+  // The title of a page that was navigated to comes with the stream, after the page itself.
+  await page.waitForFunction(() => document.title !== '');
   const { violations } = await new AxeBuilder({ page })
     .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa'])
     .analyze();
