@@ -1,6 +1,7 @@
 import { Field } from '@/components/ui/field';
 import { RadioField } from '@/components/ui/radio-field';
 import type { ActionState } from '@/lib/schemas/action-state';
+import { RotationField } from './rotation-field';
 
 /** Mark, tacho and sense of rotation. */
 export function SetupFields({ state }: { state: ActionState }) {
@@ -28,15 +29,7 @@ export function SetupFields({ state }: { state: ActionState }) {
           { value: 'falling', label: 'falling' },
         ]}
       />
-      <RadioField
-        name="rotationFromDriveEnd"
-        label="It turns, seen from the drive end"
-        state={state}
-        choices={[
-          { value: 'clockwise', label: 'clockwise' },
-          { value: 'counter-clockwise', label: 'counter-clockwise' },
-        ]}
-      />
+      <RotationField state={state} />
     </div>
   );
 }

@@ -1,5 +1,6 @@
 'use client';
 
+import { RotationField } from '@/components/register/rotation-field';
 import { Field } from '@/components/ui/field';
 import { Panel } from '@/components/ui/panel';
 import { RadioField } from '@/components/ui/radio-field';
@@ -80,15 +81,7 @@ function Senses({ state }: { state: ActionState }) {
           { value: 'with', label: 'with rotation' },
         ]}
       />
-      <RadioField
-        name="rotationFromDriveEnd"
-        label="It turns, seen from the drive end"
-        state={state}
-        choices={[
-          { value: 'clockwise', label: 'clockwise' },
-          { value: 'counter-clockwise', label: 'counter-clockwise' },
-        ]}
-      />
+      <RotationField state={state} />
       <Field name="speedRpm" label="Speed of the runs" unit="r/min" kind="decimal" state={state} />
       <Field
         name="rotorMassKg"

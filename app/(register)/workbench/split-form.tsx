@@ -1,5 +1,6 @@
 'use client';
 
+import { RotationField } from '@/components/register/rotation-field';
 import { Field } from '@/components/ui/field';
 import { Panel } from '@/components/ui/panel';
 import { RadioField } from '@/components/ui/radio-field';
@@ -56,15 +57,7 @@ function Positions({ state }: { state: ActionState }) {
     <div className="grid gap-4 sm:grid-cols-2">
       <Field name="positions" label="Number of positions" kind="whole" state={state} />
       <Field name="firstDeg" label="Position 1 at" unit="°" kind="decimal" state={state} />
-      <RadioField
-        name="rotationFromDriveEnd"
-        label="It turns, seen from the drive end"
-        state={state}
-        choices={[
-          { value: 'clockwise', label: 'clockwise' },
-          { value: 'counter-clockwise', label: 'counter-clockwise' },
-        ]}
-      />
+      <RotationField state={state} />
       <RadioField name="angleSense" label="Degrees are counted" state={state} choices={senses} />
       <RadioField name="numbered" label="Positions are numbered" state={state} choices={senses} />
       <Field
