@@ -1,11 +1,10 @@
 import 'server-only';
-import { compare, hash } from 'bcryptjs';
+import { compare } from 'bcryptjs';
 import { Person, Session } from '@/entities/person';
 import { fail, ok } from '@/lib/domain/result';
 import { changePasswordInput } from '@/lib/schemas/settings-input';
 import { command } from '../command';
-
-const ROUNDS = 10;
+import { hashPassword } from '../people/hash-password';
 
 /** Changes one's own password, known the old one; every session of one's own ends. */
 export const changePassword = command(
@@ -21,7 +20,7 @@ export const changePassword = command(
       );
     if (await compare(password, person.passwordHash))
       return fail('same', 'This is your password already. Choose another.', 'password');
-    person.passwordHash = await hash(password, ROUNDS);
+    person.passwordHash = await hashPassword(password);
     const open = { person: personId, endedAt: null };
     const sessionsEnded = await em.nativeUpdate(Session, open, { endedAt: now });
     audit({ siteId: null, entity: 'Person', entityId: personId, after: { sessionsEnded } });

@@ -1,5 +1,4 @@
 import 'server-only';
-import { hash } from 'bcryptjs';
 import { Person, Session, SiteAccess } from '@/entities/person';
 import { fail, ok, type Failure } from '@/lib/domain/result';
 import {
@@ -11,10 +10,8 @@ import {
 } from '@/lib/schemas/settings-input';
 import { command, type CommandContext } from '../command';
 import { siteWithoutAdministrator } from '../people/administrators';
+import { hashPassword } from '../people/hash-password';
 import { notFound, visiblePerson } from '../scope';
-
-/** Work factor of bcrypt, as the demo people's. */
-const ROUNDS = 10;
 
 /** Enters somebody with a role, sites and a first password. */
 export const createPerson = command(
@@ -26,7 +23,7 @@ export const createPerson = command(
       name,
       role,
       email,
-      passwordHash: await hash(password, ROUNDS),
+      passwordHash: await hashPassword(password),
       createdAt: now,
     });
     for (const site of new Set(siteIds)) em.create(SiteAccess, { person, site });
@@ -73,7 +70,7 @@ export const setPassword = command(
     if (!person) return notFound('person');
     const elsewhere = await worksElsewhere(context, person);
     if (elsewhere) return { ok: false, failure: elsewhere };
-    person.passwordHash = await hash(password, ROUNDS);
+    person.passwordHash = await hashPassword(password);
     const sessionsEnded = await endSessions(context, personId);
     const shared = await sharedSites(context, personId);
     context.audit({ ...aboutPerson(personId, shared), after: { sessionsEnded } });
