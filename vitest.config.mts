@@ -10,7 +10,7 @@ const alias = {
 export default defineConfig({
   resolve: { alias },
   test: {
-    setupFiles: ['tests/support/fail-on-console-error.ts'],
+    setupFiles: ['tests/support/fail-on-console-error.ts', 'tests/support/law-seed.ts'],
     projects: [
       {
         extends: true,

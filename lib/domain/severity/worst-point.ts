@@ -33,12 +33,13 @@ export function worstPoint<P extends PointValue>(points: readonly P[]): WorstPoi
   return worst === null ? null : { ruling: worst.ruling, verdict: worst.verdict };
 }
 
-type Rank = readonly [judged: number, index: number, size: number];
+/** The value itself stands last: a division can round two neighbouring values to one share. */
+type Rank = readonly [judged: number, index: number, share: number, value: number];
 
 function rankOf({ value, limits }: PointValue, verdict: ZoneVerdict): Rank {
   if (verdict.kind === 'no zone' || limits === null)
-    return [0, 0, Number.isFinite(value) ? value : -1];
-  return [1, severityIndex(value, limits.boundaries), value / limits.boundaries.cd];
+    return [0, 0, 0, Number.isFinite(value) ? value : -1];
+  return [1, severityIndex(value, limits.boundaries), value / limits.boundaries.cd, value];
 }
 
 function isHigher(one: Rank, other: Rank): boolean {

@@ -130,6 +130,11 @@ describe('worstPoint', () => {
     expect(worst).toMatchObject({ ruling: { point: 'two' }, verdict: { code: 'NO_LIMITS' } });
   });
 
+  it('tells values apart that share one quotient', () => {
+    const [smaller, larger] = [at('A-H', 3.5e-323), at('B-H', 4e-323)];
+    expect(worstPoint([smaller, larger])?.ruling.point).toBe('B-H');
+  });
+
   it('of equal points takes the first, and has none without points', () => {
     expect(worstPoint([at('A-H', 2), at('B-H', 2)])?.ruling.point).toBe('A-H');
     expect(worstPoint([])).toBeNull();
