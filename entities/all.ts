@@ -3,6 +3,7 @@ import { AuditEvent } from './audit-event';
 import { BalanceJob, JobPlane, JobPoint, Run, RunVector } from './balance-job';
 import { Bearing, Point } from './bearing';
 import { CautionShown, SignOff } from './caution';
+import { CoefficientReuse } from './coefficient-reuse';
 import { LimitSet, LimitUse } from './limit-set';
 import { Machine, MachineEvent } from './machine';
 import { Derived, MeasuredRecord, OneXVector, Reading, Waveform } from './measured-record';
@@ -44,6 +45,7 @@ export const entities = [
   Weight,
   Answer,
   Coefficient,
+  CoefficientReuse,
   CautionShown,
   SignOff,
   Person,

@@ -28,7 +28,14 @@ export const BalanceJob = defineEntity({
     machine: () => p.manyToOne(Machine).ref(),
     rotor: () => p.manyToOne(Rotor).ref(),
     setup: () => p.manyToOne(Setup).ref(),
-    kind: p.enum(['one-plane', 'two-plane'] as const),
+    kind: p.enum([
+      'one-plane',
+      'two-plane',
+      'three or more planes',
+      'static only',
+      'couple only',
+      'check only',
+    ] as const),
     reason: p.string().length(1000),
     unit: p.enum(['mm/s rms', 'µm p-p'] as const),
     /** How this job's people read phase and count angles; converted once, at the edge. */
@@ -113,6 +120,8 @@ export const Run = defineEntity({
     weightsState: p.json<WeightOnRotor[]>(),
     state: p.enum(['kept', 'held', 'lined through'] as const).default('kept'),
     stateReason: p.string().length(1000).nullable(),
+    /** The run that this one corrects: the same run as it really was. */
+    replaces: () => p.manyToOne(Run).ref().nullable(),
     person: () => p.manyToOne(Person).ref(),
     createdAt: p.datetime(),
   },

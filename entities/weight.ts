@@ -41,7 +41,11 @@ export const Weight = defineEntity({
     /** After its run: does the trial weight stay? Null until somebody has said. */
     stays: p.boolean().nullable(),
     endedAt: p.datetime().nullable(),
-    ending: p.enum(['taken off', 'moved', 'found missing', 'found worn'] as const).nullable(),
+    ending: p
+      .enum(['taken off', 'moved', 'found missing', 'found worn', 'recorded wrongly'] as const)
+      .nullable(),
+    /** The job in which a weight of an earlier job was taken off. */
+    endedInJob: () => p.manyToOne(BalanceJob).ref().nullable(),
     endedBy: () => p.manyToOne(Person).ref().nullable(),
     endReason: p.string().length(400).nullable(),
     replaces: () => p.manyToOne(Weight).ref().nullable(),

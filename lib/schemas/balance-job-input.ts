@@ -145,6 +145,28 @@ export const acceptAnswerInput = z.object({
   fingerprint: z.string().min(1),
 });
 
+/** What must be as it was when the stored coefficients were measured; each is ticked by a person. */
+export const REUSE_CONDITIONS = [
+  { name: 'sameSensors', label: 'The sensors sit at the same places in the same direction.' },
+  { name: 'sameMark', label: 'Mark and tacho are where they were.' },
+  { name: 'sameSupports', label: 'Bearings, feet, isolators and base are unchanged since then.' },
+  { name: 'sameState', label: 'Load and temperature are as usual, and the rotor is clean.' },
+] as const;
+
+export const reuseCoefficientsInput = z.object({
+  jobId: id,
+  sameSensors: mustTick('Look at the sensors. Where one has moved, make trial runs.'),
+  sameMark: mustTick('Look at mark and tacho. Where one has moved, make trial runs.'),
+  sameSupports: mustTick('Where supports have changed, make trial runs.'),
+  sameState: mustTick('Where load, temperature or deposits differ, make trial runs.'),
+  reason: z.string().trim().max(1000).default(''),
+});
+
+export const withdrawReuseInput = z.object({
+  jobId: id,
+  reason: text('why trial runs are made after all', 1000),
+});
+
 export const lineThroughRunInput = z.object({
   jobId: id,
   runId: id,

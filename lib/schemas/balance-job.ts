@@ -219,6 +219,47 @@ export type TrialProposalDto = {
   forcePctOfLoad: number;
   angleDeg: number;
   expectedChange: number | null;
+  /** Where the coefficient book expects the weight to lower the reading; null without a book. */
+  loweringDeg: number | null;
+};
+
+/** An influence coefficient of the book, size per kg·mm and turn. */
+export type BookCoefficientDto = {
+  planeName: string;
+  pointLabel: string;
+  sizePerKgMm: number;
+  deg: number;
+};
+
+/** What the book offers instead of trial runs, or in words why it offers nothing. */
+export type BookOfferDto =
+  | { failure: string; empty: boolean }
+  | {
+      failure: null;
+      grade: 'good' | 'with care';
+      speedRpm: number;
+      lines: (BookCoefficientDto & { count: number; spreadPct: number | null })[];
+    };
+
+/** Coefficients of the book that this job uses, as they were when a person took them. */
+export type ReuseDto = {
+  grade: 'good' | 'with care';
+  speedRpm: number;
+  at: string;
+  person: string;
+  confirmed: string[];
+  reason: string | null;
+  lines: BookCoefficientDto[];
+};
+
+/** A trial run against what the book knows of the same plane and point. */
+export type TrialComparisonDto = {
+  planeName: string;
+  pointLabel: string;
+  ratio: number;
+  turnDeg: number;
+  agrees: boolean;
+  sensesSuspect: boolean;
 };
 
 export type BalanceJobDto = {
@@ -254,6 +295,9 @@ export type BalanceJobDto = {
   repeats: { pointId: number; test: RepeatTest | null }[];
   trialProposal: TrialProposalDto | null;
   trialChecks: TrialCheck[];
+  book: BookOfferDto | null;
+  reuse: ReuseDto | null;
+  trialsAgainstBook: TrialComparisonDto[];
   accepted: (AnswerDto & { number: number; acceptedAt: string; acceptedBy: string })[];
   /** What the arithmetic says now: an answer to accept, or why there is none. */
   answer: AnswerDto | null;

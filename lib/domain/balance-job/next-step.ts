@@ -29,6 +29,8 @@ export type StepJob = {
   readonly answerNumber: number | null;
   /** Number of the last run that stood when the newest answer was accepted. */
   readonly answerAfterRun: number | null;
+  /** Coefficients of the book are used instead of trial runs. */
+  readonly reusesBook: boolean;
 };
 
 /** What comes next on the run sheet. */
@@ -44,7 +46,8 @@ export type Step =
 
 /**
  * The next step of a balance job in the order the trade expects: base, then per plane trial weight,
- * trial run and the question whether the weight stays, then answer, fit, check, and trim or sign.
+ * trial run and the question whether the weight stays, then answer, fit, check, and trim or sign. With
+ * coefficients from the book the trials are left out.
  * Source: common practice (no single published source).
  * Example: a job with an accepted base and no weights gives `{ step: 'fit trial', planeId }`.
  */
@@ -63,7 +66,9 @@ function learningStep(job: StepJob): Step {
       ? { step: 'settle trial', weightId, planeId }
       : { step: 'trial run', weightId, planeId };
   }
-  const open = job.planeIds.find((planeId) => !planeLearned(job, planeId));
+  const open = job.reusesBook
+    ? undefined
+    : job.planeIds.find((planeId) => !planeLearned(job, planeId));
   return open === undefined ? { step: 'answer' } : { step: 'fit trial', planeId: open };
 }
 

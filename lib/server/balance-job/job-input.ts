@@ -1,6 +1,11 @@
 import 'server-only';
 import type { WeightOnRotor } from '@/entities/balance-job';
-import type { FittedWeight, JobInput, JobRun } from '@/lib/domain/balancing/job-input';
+import type {
+  CoefficientSource,
+  FittedWeight,
+  JobInput,
+  JobRun,
+} from '@/lib/domain/balancing/job-input';
 import type { LoadedJob, LoadedRun } from './load-job';
 
 /** What the arithmetic needs of a job: its kept runs, and what hangs on the rotor now. */
@@ -13,9 +18,17 @@ export function jobInput(loaded: LoadedJob): JobInput {
     points: points.map(({ id, label }) => ({ id, label })),
     runs: kept.map(jobRun),
     weightsNow: weightsNow(loaded),
-    coefficientsFrom: { kind: 'learning runs' },
+    coefficientsFrom: coefficientSource(loaded),
     rotor: jobRotor(loaded),
   };
+}
+
+/** A job that gave up the coefficient book after its first check run learns from all its own runs. */
+function coefficientSource({ reuse, answers }: LoadedJob): CoefficientSource {
+  const begun = answers[0]?.inputs.coefficientsFrom?.kind === 'stored';
+  if (!reuse) return { kind: begun ? 'all runs' : 'learning runs' };
+  const { speedRpm, coefficients } = reuse;
+  return { kind: 'stored', speedRpm, coefficients };
 }
 
 /** Weights of the job that are on the rotor, as the arithmetic takes them. */

@@ -2,6 +2,7 @@ import 'server-only';
 import type { EntityManager, Loaded } from '@mikro-orm/postgresql';
 import { Answer } from '@/entities/answer';
 import { JobPlane, JobPoint, Run, RunVector, type BalanceJob } from '@/entities/balance-job';
+import { CoefficientReuse } from '@/entities/coefficient-reuse';
 import type { Point } from '@/entities/bearing';
 import type { Plane } from '@/entities/rotor';
 import { Weight } from '@/entities/weight';
@@ -20,6 +21,8 @@ export type LoadedJob = {
   /** Every weight fitted in this job, ended ones too, in the order fitted. */
   weights: Loaded<Weight, 'plane' | 'position' | 'fittedBy' | 'endedBy'>[];
   answers: Answer[];
+  /** Coefficients of the book used instead of trial runs; null where there are none. */
+  reuse: CoefficientReuse | null;
   step: Step;
 };
 
@@ -40,6 +43,7 @@ export async function loadJob(em: EntityManager, job: VisibleJob): Promise<Loade
     { orderBy: { id: 'asc' }, populate: ['plane', 'position', 'fittedBy', 'endedBy'] },
   );
   const answers = await em.find(Answer, { job: job.id }, { orderBy: { number: 'asc' } });
+  const reuse = await em.findOne(CoefficientReuse, { job: job.id, withdrawnAt: null });
   const loaded = {
     job,
     planes: planes.map(({ plane }) => plane.$),
@@ -47,6 +51,7 @@ export async function loadJob(em: EntityManager, job: VisibleJob): Promise<Loade
     runs: runs.map((run) => ({ run, vectors: vectors.filter((v) => v.run.id === run.id) })),
     weights,
     answers,
+    reuse,
   };
   return { ...loaded, step: stepOf(loaded) };
 }
@@ -72,5 +77,6 @@ function stepOf(loaded: Omit<LoadedJob, 'step'>): Step {
     })),
     answerNumber: newest?.number ?? null,
     answerAfterRun: newest?.afterRunNumber ?? null,
+    reusesBook: loaded.reuse !== null,
   });
 }

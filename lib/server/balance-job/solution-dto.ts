@@ -1,8 +1,11 @@
 import 'server-only';
-import type { JobInput } from '@/lib/domain/balancing/job-input';
+import type { JobInput, PointVector } from '@/lib/domain/balancing/job-input';
 import type { JobSolution } from '@/lib/domain/balancing/job-solution';
+import { knownResponse } from '@/lib/domain/balancing/known-response';
+import type { ReusableBook } from '@/lib/domain/balancing/reusable-coefficients';
 import { proposeTrial } from '@/lib/domain/balancing/trial-proposal';
 import type { ToleranceDto, TrialCheck, TrialProposalDto } from '@/lib/schemas/balance-job';
+import { baseRepeats } from './base-repeats';
 import type { LoadedJob } from './load-job';
 
 /** How clearly each trial weight was heard, at the point that heard it best. */
@@ -41,18 +44,23 @@ export function toleranceDto({ tolerance }: JobSolution): ToleranceDto | null {
 }
 
 /** A first trial weight for the plane whose trial is due; null without a rotor mass. */
-export function trialProposal(loaded: LoadedJob): TrialProposalDto | null {
+export function trialProposal(
+  loaded: LoadedJob,
+  book: ReusableBook | null,
+): TrialProposalDto | null {
   const { step, planes, job } = loaded;
   if (step.step !== 'fit trial') return null;
   const plane = planes.find(({ id }) => id === step.planeId);
   const massKg = job.rotor.$.massKg;
   if (!plane || !massKg) return null;
+  const known = book ? knownResponse(plane.id, book.coefficients, baseNow(loaded)) : null;
   const proposal = proposeTrial({
     radiusMm: plane.radiusMm,
     speedRpm: job.machine.$.nominalSpeedRpm,
     rotorMassKg: massKg,
     bearingLoadN: planes.length > 1 ? nearestBearingLoadN(massKg) : null,
     planeLimitG: plane.maxGTotal,
+    response: known,
   });
   return {
     planeId: plane.id,
@@ -62,7 +70,18 @@ export function trialProposal(loaded: LoadedJob): TrialProposalDto | null {
     forcePctOfLoad: proposal.forcePctOfLoad,
     angleDeg: proposal.angleDeg,
     expectedChange: proposal.expectedChange,
+    loweringDeg: known?.loweringDeg ?? null,
   };
+}
+
+/** The base as the repeats have it; the last base run where it was not repeated. */
+function baseNow(loaded: LoadedJob): PointVector[] {
+  const last = loaded.runs.findLast(({ run }) => run.purpose === 'base' && run.state === 'kept');
+  return baseRepeats(loaded).flatMap(({ pointId, test }) => {
+    if (test) return [{ pointId, amplitude: test.meanAmplitude, lagDeg: test.meanLagDeg }];
+    const single = last?.vectors.find(({ point }) => point.id === pointId);
+    return single ? [{ pointId, amplitude: single.amplitude, lagDeg: single.lagDeg }] : [];
+  });
 }
 
 /** Half the rotor's weight: the usual share where the static load of the bearing is not recorded. */

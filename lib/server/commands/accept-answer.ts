@@ -44,7 +44,7 @@ export const acceptAnswer = command(
     });
     job.state = 'answered';
     const { number } = answer;
-    if (number === 1) keepCoefficients(em, loaded, solution.value, now);
+    if (number === 1 && !loaded.reuse) keepCoefficients(em, loaded, solution.value, now);
     await em.flush();
     audit({
       siteId: job.site.id,

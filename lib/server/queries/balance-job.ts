@@ -11,6 +11,7 @@ import type { BalanceJobDto, RunDto } from '@/lib/schemas/balance-job';
 import { answerDto } from '../balance-job/answer-dto';
 import { asFitted } from '../balance-job/as-fitted';
 import { baseRepeats } from '../balance-job/base-repeats';
+import { bookPart } from '../balance-job/book-dto';
 import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob, type LoadedRun } from '../balance-job/load-job';
@@ -34,6 +35,7 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
   const rotorWeights = await weightsOnRotor(em, job.rotor.id);
   const planes = await planeDtos(em, loaded.planes);
   const check = checkVerdict(loaded);
+  const { offered, ...book } = await bookPart(em, loaded);
   return {
     ...headOf(loaded, names),
     limits: await limitsOf(em, job.machine.id),
@@ -47,8 +49,9 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     choices: await choicesOf(em, loaded),
     step: loaded.step,
     repeats: baseRepeats(loaded),
-    trialProposal: trialProposal(loaded),
     ...arithmeticOf(loaded),
+    ...book,
+    trialProposal: trialProposal(loaded, offered),
     accepted: acceptedOf(loaded, names),
     asFitted: asFitted(loaded),
     check,
@@ -136,7 +139,11 @@ type Arithmetic = Pick<BalanceJobDto, 'answer' | 'answerFailure' | 'trialChecks'
 function arithmeticOf(loaded: LoadedJob): Arithmetic {
   const { step } = loaded.step;
   const nothing = { answer: null, answerFailure: null, trialChecks: [], tolerance: null };
-  if (!loaded.runs.some(({ run }) => run.purpose === 'trial')) return nothing;
+  const learned =
+    loaded.reuse !== null ||
+    loaded.answers.length > 0 ||
+    loaded.runs.some(({ run }) => run.purpose === 'trial');
+  if (!learned) return nothing;
   const input = jobInput(loaded);
   const solution = solveJob(input);
   const asked = step === 'answer' || step === 'decide';

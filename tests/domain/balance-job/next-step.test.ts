@@ -8,6 +8,7 @@ const job = (over: Partial<StepJob>): StepJob => ({
   weights: [],
   answerNumber: null,
   answerAfterRun: null,
+  reusesBook: false,
   ...over,
 });
 

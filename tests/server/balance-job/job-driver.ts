@@ -9,6 +9,7 @@ import { fitWeight } from '@/lib/server/commands/fit-weight';
 import { openBalanceJob } from '@/lib/server/commands/open-balance-job';
 import { recordRun } from '@/lib/server/commands/record-run';
 import { settleTrial } from '@/lib/server/commands/settle-weight';
+import { signJob } from '@/lib/server/commands/sign-job';
 import { balanceJob } from '@/lib/server/queries/balance-job';
 import type { SeededMachine } from '@/tests/support/plant';
 
@@ -133,6 +134,19 @@ export class JobDriver {
     if (!answer) throw new Error(answerFailure ?? 'no answer');
     valueOf(await acceptAnswer(this.actor, { jobId: this.jobId, fingerprint: answer.fingerprint }));
     return answer;
+  }
+
+  /** Signs with everything on the rotor made permanent. */
+  async sign(reason = 'As it is.') {
+    const { weights } = await this.sheet();
+    return signJob(this.actor, {
+      jobId: this.jobId,
+      statement: 'Balanced and handed back.',
+      permanentWeightIds: weights.filter(({ endedAt }) => endedAt === null).map(({ id }) => id),
+      handBack: 'on',
+      areaOwner: 'Marta Lind',
+      reason,
+    });
   }
 
   async sheet(): Promise<BalanceJobDto> {

@@ -6,6 +6,7 @@ import { acceptBase } from '@/lib/server/commands/accept-base';
 import { fitWeight } from '@/lib/server/commands/fit-weight';
 import { openBalanceJob } from '@/lib/server/commands/open-balance-job';
 import { recordRun } from '@/lib/server/commands/record-run';
+import { reuseCoefficients, withdrawReuse } from '@/lib/server/commands/reuse-coefficients';
 import { keepRun, lineThroughRun } from '@/lib/server/commands/settle-run';
 import { settleTrial, takeOffWeight } from '@/lib/server/commands/settle-weight';
 import { signJob } from '@/lib/server/commands/sign-job';
@@ -150,6 +151,24 @@ export const cases: OtherSiteCase[] = [
         rotorState: 'x',
         safe: 'on',
       }),
+  },
+  {
+    name: 'reuseCoefficients',
+    expects: 'not-found',
+    run: async (foreigner, plant) =>
+      reuseCoefficients(foreigner, {
+        jobId: (await homeJob(plant)).jobId,
+        sameSensors: 'on',
+        sameMark: 'on',
+        sameSupports: 'on',
+        sameState: 'on',
+      }),
+  },
+  {
+    name: 'withdrawReuse',
+    expects: 'not-found',
+    run: async (foreigner, plant) =>
+      withdrawReuse(foreigner, { jobId: (await homeJob(plant)).jobId, reason: 'x' }),
   },
   {
     name: 'signJob',

@@ -2,9 +2,11 @@
 
 import { AnswerCard } from '@/components/balancing/answer-card';
 import { TrialResponses } from '@/components/balancing/trial-responses';
+import { TrialsAgainstBook } from '@/components/balancing/trials-against-book';
 import { Notice } from '@/components/ui/notice';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import { acceptAnswerAction } from './actions';
+import { ReuseNote } from './book-panel';
 import { StepForm } from './step-form';
 
 /** The answer to look at and accept, or in words why there is none. */
@@ -14,6 +16,8 @@ export function AnswerStep({ job }: { job: BalanceJobDto }) {
   const afterCheck = job.step.step === 'decide';
   return (
     <div className="flex flex-col gap-4">
+      <ReuseNote job={job} />
+      <TrialsAgainstBook trials={job.trialsAgainstBook} />
       <TrialResponses checks={job.trialChecks} decimalMark={job.site.decimalMark} />
       {job.answerFailure !== null && (
         <Notice kind={afterCheck ? 'info' : 'failure'} title={afterCheck ? 'No trim' : undefined}>

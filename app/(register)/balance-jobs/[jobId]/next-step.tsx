@@ -1,13 +1,21 @@
 'use client';
 
 import { AnswerCard } from '@/components/balancing/answer-card';
+import { TrialsAgainstBook } from '@/components/balancing/trials-against-book';
 import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
-import { formatDegrees, formatMass, formatNumber, formatQuantity } from '@/lib/format';
+import {
+  formatDegrees,
+  formatMass,
+  formatNumber,
+  formatQuantity,
+  formatRotorAngle,
+} from '@/lib/format';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import { AnswerStep } from './answer-step';
 import { AsFittedPanel } from './as-fitted-panel';
 import { BaseStep } from './base-step';
+import { BookPanel } from './book-panel';
 import { CheckTable } from './check-table';
 import { RunForm } from './run-form';
 import { SettleForm } from './settle-form';
@@ -22,7 +30,12 @@ export function NextStep({ job }: { job: BalanceJobDto }) {
     case 'base':
       return <BaseStep job={job} />;
     case 'fit trial':
-      return <FitTrial job={job} planeId={step.planeId} />;
+      return (
+        <>
+          <BookPanel job={job} />
+          <FitTrial job={job} planeId={step.planeId} />
+        </>
+      );
     case 'trial run':
       return (
         <Panel title={`Next: trial run, plane ${nameOf(job, step.planeId)}`}>
@@ -32,6 +45,7 @@ export function NextStep({ job }: { job: BalanceJobDto }) {
     case 'settle trial':
       return (
         <Panel title="Next: is the trial weight still on the rotor?">
+          <TrialsAgainstBook trials={job.trialsAgainstBook} />
           <SettleForm job={job} weightId={step.weightId} />
         </Panel>
       );
@@ -65,6 +79,13 @@ function FitTrial({ job, planeId }: { job: BalanceJobDto; planeId: number }) {
           <span className="figures">{formatNumber(proposal.forcePctOfLoad)}</span> % of the load it
           rests on ({proposal.basis}). At the mark the answer comes out right whichever way degrees
           are counted.
+          {proposal.loweringDeg !== null && (
+            <>
+              {' '}
+              By the coefficient book it lowers the reading most at{' '}
+              <span className="figures">{formatRotorAngle(proposal.loweringDeg)}</span>.
+            </>
+          )}
         </p>
       )}
       <WeightForm job={job} plane={plane} purpose="trial" proposedG={proposal?.massG ?? null} />
