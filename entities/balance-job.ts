@@ -93,13 +93,17 @@ export const JobPoint = defineEntity({
 });
 export type JobPoint = InferEntity<typeof JobPoint>;
 
-/** One weight as it was on the rotor during a run, copied from the ledger by value. */
+/**
+ * One weight as it was on the rotor during a run, copied from the ledger by value. An older weight that the
+ * job took off stands here as the same weight on the opposite side, which does the same.
+ */
 export type WeightOnRotor = {
   weightId: number;
   planeId: number;
   massG: number;
   radiusMm: number;
   angleDeg: number;
+  takenOff?: true;
 };
 
 /** A run of a job. Immutable; a slip is lined through and run again. */

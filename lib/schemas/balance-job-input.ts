@@ -139,6 +139,45 @@ export const takeOffWeightInput = z.object({
   namedPerson: namedPerson('who locked the machine out'),
 });
 
+/** What was really found where the ledger lists a weight. */
+export const correctLedgerInput = z
+  .object({
+    jobId: id,
+    weightId: id,
+    found: choice(['missing', 'worn'], 'Say whether the weight is gone or worn.'),
+    massG: optionalNumber({ what: 'the mass that is left', unit: 'g', above: 0, max: 1_000_000 }),
+    reason: text('what you saw', 400),
+    standingStill: mustTick(
+      'Look at the rotor only when it stands still and is locked out. Tick it.',
+    ),
+    namedPerson: namedPerson('who locked the machine out'),
+  })
+  .superRefine(({ found, massG }, context) => {
+    if (found === 'worn' && massG === null)
+      context.addIssue({
+        code: 'custom',
+        path: ['massG'],
+        message: 'Weigh the worn weight, or estimate it, and write its mass.',
+      });
+  });
+
+/** A weight that hangs on the rotor and is on no ledger. */
+export const recordFoundWeightInput = z.object({
+  jobId: id,
+  planeId: id,
+  positionId: z.union([z.literal('').transform(() => null), z.null(), id]).default(null),
+  massG: typedNumber({ what: 'the mass', unit: 'g', above: 0, max: 1_000_000 }),
+  radiusMm: typedNumber({ what: 'the radius', unit: 'mm', above: 0, max: 20_000 }),
+  angleDeg: optionalNumber({ what: 'the angle', unit: '°', min: 0, max: 360 }),
+  angleSense: z.enum(['against', 'with', '']).default(''),
+  arcMm: optionalNumber({ what: 'the arc along the rim', unit: 'mm', min: 0 }),
+  fixing: text('how the weight is fixed', 200),
+  standingStill: mustTick(
+    'Look at the rotor only when it stands still and is locked out. Tick it.',
+  ),
+  namedPerson: namedPerson('who locked the machine out'),
+});
+
 export const acceptAnswerInput = z.object({
   jobId: id,
   /** Fingerprint of the answer the person looked at, so that an older one is never accepted. */

@@ -287,7 +287,7 @@ export type BalanceJobDto = {
   runs: RunDto[];
   /** Weights fitted in this job, in the order fitted. */
   weights: LedgerWeightDto[];
-  /** Weights on the rotor from before this job. */
+  /** Weights from before this job: those on the rotor, and those that came off during the job. */
   olderWeights: LedgerWeightDto[];
   /** Recent 1x vectors with phase from uploads, by point. */
   choices: { pointId: number; vectors: VectorChoice[] }[];

@@ -1,10 +1,13 @@
 import 'server-only';
+import type { Answer } from '@/entities/answer';
+import type { WeightOnRotor } from '@/entities/balance-job';
 import { angleDeg, fromPolar, size, subtract, sum } from '@/lib/domain/complex';
 import { predictRun } from '@/lib/domain/balancing/predict-run';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
 import type { AsFittedDto, AsFittedPlane } from '@/lib/schemas/balance-job';
 import { weightsNow } from './job-input';
 import type { LoadedJob } from './load-job';
+import { changedOnRotor } from './weights-on-rotor';
 
 /** From this share of the asked unbalance up, what was fitted is not what was asked for (practice). */
 const FAR_SHARE = 0.25;
@@ -18,12 +21,7 @@ export function asFitted(loaded: LoadedJob): AsFittedDto | null {
   const asked = answer?.result.answer?.add;
   if (!answer || !asked || loaded.step.step !== 'fit correction') return null;
   const planes = asked.flatMap((plane): AsFittedPlane[] => {
-    const fitted = loaded.weights.filter(
-      (weight) =>
-        weight.endedAt === null &&
-        weight.plane.id === plane.planeId &&
-        weight.answerNumber === answer.number,
-    );
+    const fitted = fittedFor(loaded, answer, plane.planeId);
     if (fitted.length === 0) return [];
     const got = sum(fitted.map((w) => fromPolar(w.massG * w.radiusMm, w.angleDeg)));
     const off = size(subtract(got, fromPolar(plane.unbalanceGmm, plane.angleDeg)));
@@ -50,4 +48,20 @@ export function asFitted(loaded: LoadedJob): AsFittedDto | null {
       lagDeg,
     })),
   };
+}
+
+/** What came on for an answer in a plane, and what older weights came off after it. */
+function fittedFor(loaded: LoadedJob, answer: Answer, planeId: number): WeightOnRotor[] {
+  const own = new Set(
+    loaded.weights.filter(({ answerNumber }) => answerNumber === answer.number).map(({ id }) => id),
+  );
+  const gone = new Set(
+    loaded.removed
+      .filter(({ endedAt }) => endedAt && endedAt >= answer.acceptedAt)
+      .map(({ id }) => id),
+  );
+  return changedOnRotor(loaded).filter(
+    (weight) =>
+      weight.planeId === planeId && (own.has(weight.weightId) || gone.has(weight.weightId)),
+  );
 }

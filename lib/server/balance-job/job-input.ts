@@ -7,6 +7,7 @@ import type {
   JobRun,
 } from '@/lib/domain/balancing/job-input';
 import type { LoadedJob, LoadedRun } from './load-job';
+import { changedOnRotor } from './weights-on-rotor';
 
 /** What the arithmetic needs of a job: its kept runs, and what hangs on the rotor now. */
 export function jobInput(loaded: LoadedJob): JobInput {
@@ -31,16 +32,9 @@ function coefficientSource({ reuse, answers }: LoadedJob): CoefficientSource {
   return { kind: 'stored', speedRpm, coefficients };
 }
 
-/** Weights of the job that are on the rotor, as the arithmetic takes them. */
-export function weightsNow({ weights }: LoadedJob): FittedWeight[] {
-  return weights
-    .filter((weight) => weight.endedAt === null)
-    .map(({ plane, massG, radiusMm, angleDeg }) => ({
-      planeId: plane.id,
-      massG,
-      radiusMm,
-      angleDeg,
-    }));
+/** What has changed on the rotor since the job began, as the arithmetic takes it. */
+export function weightsNow(loaded: LoadedJob): FittedWeight[] {
+  return fittedWeights(changedOnRotor(loaded));
 }
 
 /** Weights of a run's snapshot, as the arithmetic takes them. */

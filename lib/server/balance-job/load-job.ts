@@ -10,6 +10,8 @@ import { nextStep, type Step } from '@/lib/domain/balance-job/next-step';
 
 export type VisibleJob = Loaded<BalanceJob, 'machine' | 'rotor' | 'setup' | 'site'>;
 
+export type LoadedWeight = Loaded<Weight, 'plane' | 'position' | 'fittedBy' | 'endedBy'>;
+
 export type LoadedRun = { run: Run; vectors: RunVector[] };
 
 /** A job with everything its arithmetic and its order of work depend on. */
@@ -19,7 +21,11 @@ export type LoadedJob = {
   points: Loaded<Point, 'bearing'>[];
   runs: LoadedRun[];
   /** Every weight fitted in this job, ended ones too, in the order fitted. */
-  weights: Loaded<Weight, 'plane' | 'position' | 'fittedBy' | 'endedBy'>[];
+  weights: LoadedWeight[];
+  /** Older weights that came off after the first run: the arithmetic counts them. */
+  removed: LoadedWeight[];
+  /** Older weights that came off, or were found gone, before the first run: every run was without them. */
+  goneBefore: LoadedWeight[];
   answers: Answer[];
   /** Coefficients of the book used instead of trial runs; null where there are none. */
   reuse: CoefficientReuse | null;
@@ -42,6 +48,11 @@ export async function loadJob(em: EntityManager, job: VisibleJob): Promise<Loade
     { job: job.id },
     { orderBy: { id: 'asc' }, populate: ['plane', 'position', 'fittedBy', 'endedBy'] },
   );
+  const ended = await em.find(
+    Weight,
+    { endedInJob: job.id },
+    { orderBy: { id: 'asc' }, populate: ['plane', 'position', 'fittedBy', 'endedBy'] },
+  );
   const answers = await em.find(Answer, { job: job.id }, { orderBy: { number: 'asc' } });
   const reuse = await em.findOne(CoefficientReuse, { job: job.id, withdrawnAt: null });
   const loaded = {
@@ -50,10 +61,16 @@ export async function loadJob(em: EntityManager, job: VisibleJob): Promise<Loade
     points: points.map(({ point }) => point.$),
     runs: runs.map((run) => ({ run, vectors: vectors.filter((v) => v.run.id === run.id) })),
     weights,
+    removed: ended.filter(({ endedAt }) => isAfterFirst(runs, endedAt)),
+    goneBefore: ended.filter(({ endedAt }) => !isAfterFirst(runs, endedAt)),
     answers,
     reuse,
   };
   return { ...loaded, step: stepOf(loaded) };
+}
+
+function isAfterFirst([first]: readonly Run[], endedAt: Date | null | undefined): boolean {
+  return Boolean(first && endedAt && endedAt > first.takenAt);
 }
 
 function stepOf(loaded: Omit<LoadedJob, 'step'>): Step {
@@ -67,16 +84,33 @@ function stepOf(loaded: Omit<LoadedJob, 'step'>): Step {
       state: run.state,
       weightIds: run.weightsState.map((weight) => weight.weightId),
     })),
-    weights: loaded.weights.map((weight) => ({
-      id: weight.id,
-      planeId: weight.plane.id,
-      purpose: weight.purpose,
-      on: weight.endedAt === null,
-      stays: weight.stays ?? null,
-      answerNumber: weight.answerNumber ?? null,
-    })),
+    weights: [
+      ...loaded.weights.map((weight) => ({
+        id: weight.id,
+        planeId: weight.plane.id,
+        purpose: weight.purpose,
+        on: weight.endedAt === null,
+        stays: weight.stays ?? null,
+        answerNumber: weight.answerNumber ?? null,
+      })),
+      ...loaded.removed.map((weight) => takenOff(weight, loaded.answers)),
+    ],
     answerNumber: newest?.number ?? null,
     answerAfterRun: newest?.afterRunNumber ?? null,
     reusesBook: loaded.reuse !== null,
   });
+}
+
+/** An older weight that came off is a correction of the answer that stood then. */
+function takenOff(weight: Weight, answers: readonly Answer[]) {
+  const { endedAt } = weight;
+  const before = answers.findLast(({ acceptedAt }) => endedAt && acceptedAt <= endedAt);
+  return {
+    id: weight.id,
+    planeId: weight.plane.id,
+    purpose: 'correction' as const,
+    on: true,
+    stays: null,
+    answerNumber: before?.number ?? null,
+  };
 }

@@ -129,8 +129,11 @@ function notOfThisRun(loaded: LoadedJob, vector: OneXVector): Result<never> | nu
 const DAY_MS = 86_400_000;
 
 /** Since when the rotor carries what it carries now: the last weight on or off; a day before the job. */
-export function rotorAsItIsSince({ job, weights }: LoadedJob): Date {
-  const changes = weights.flatMap(({ fittedAt, endedAt }) => [fittedAt, endedAt ?? fittedAt]);
+export function rotorAsItIsSince({ job, weights, removed }: LoadedJob): Date {
+  const changes = [...weights, ...removed].flatMap(({ fittedAt, endedAt }) => [
+    fittedAt,
+    endedAt ?? fittedAt,
+  ]);
   return changes.reduce(
     (latest, at) => (at > latest ? at : latest),
     new Date(job.openedAt.getTime() - DAY_MS),

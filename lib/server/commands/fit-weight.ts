@@ -1,13 +1,12 @@
 import 'server-only';
-import type { EntityManager } from '@mikro-orm/postgresql';
 import type { z } from 'zod';
-import { Plane, Position } from '@/entities/rotor';
+import type { Plane } from '@/entities/rotor';
 import { Weight } from '@/entities/weight';
-import { placeOfWeight } from '@/lib/domain/balance-job/place-of-weight';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { fitWeightInput } from '@/lib/schemas/balance-job-input';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
 import { recordCautions } from '../balance-job/record-cautions';
+import { resolvePlace } from '../balance-job/resolve-place';
 import { roomFailure } from '../balance-job/room-left';
 import { command } from '../command';
 import { notFound, visibleJob } from '../scope';
@@ -27,7 +26,9 @@ export const fitWeight = command(
     const place = await resolvePlace(em, input);
     if (!place.ok) return place;
     const { plane, position, angleDeg } = place.value;
-    const full = await roomFailure(em, plane, position, input.massG);
+    const full =
+      recordedAgain(loaded, place.value, input) ??
+      (await roomFailure(em, plane, position, input.massG));
     if (full) return full;
     const weight = em.create(Weight, {
       rotor: job.rotor,
@@ -38,7 +39,7 @@ export const fitWeight = command(
       massG: input.massG,
       massSource: input.massSource,
       purpose: input.purpose,
-      answerNumber: input.purpose === 'correction' ? (loaded.answers.at(-1)?.number ?? null) : null,
+      answerNumber: answerFor(loaded, input),
       fixing: input.fixing,
       entered: {
         angleDeg: input.angleDeg ?? angleDeg,
@@ -61,20 +62,41 @@ export const fitWeight = command(
   },
 );
 
+function answerFor({ answers }: LoadedJob, { purpose }: Input): number | null {
+  return purpose === 'correction' ? (answers.at(-1)?.number ?? null) : null;
+}
+
 function outOfOrder(loaded: LoadedJob, input: Input): Result<never> | null {
   const { step } = loaded;
   if (step.step === 'closed') return fail('closed', 'This job is closed. Open a new one.');
   if (!loaded.planes.some((plane) => plane.id === input.planeId))
     return notFound('plane of this job');
   if (input.purpose === 'trial') return trialOutOfOrder(loaded, input.planeId);
-  if (step.step === 'fit correction') {
-    if (step.planeIds.includes(input.planeId)) return null;
-    return fail(
-      'fitted',
-      'A weight for this answer is already recorded in this plane. Take it off in the ledger first if it was moved.',
-    );
-  }
+  if (step.step === 'fit correction') return null;
   return fail('out-of-order', 'Accept an answer first; then record what was really fitted.');
+}
+
+/** Fitted twice at one place is possible; pressed twice is likelier, and a rotor is not guessed about. */
+function recordedAgain(
+  { weights }: LoadedJob,
+  { plane, angleDeg }: { plane: Plane; angleDeg: number },
+  { massG, radiusMm, purpose }: Input,
+): Result<never> | null {
+  const same = weights.some(
+    (weight) =>
+      weight.endedAt === null &&
+      weight.purpose === purpose &&
+      weight.plane.id === plane.id &&
+      weight.massG === massG &&
+      weight.radiusMm === radiusMm &&
+      weight.angleDeg === angleDeg,
+  );
+  if (!same) return null;
+  return fail(
+    'recorded-already',
+    `${massG} g at this place in plane ${plane.name} are recorded already. If two such weights hang there, record them as one: take the first off in the ledger and enter both masses together.`,
+    'massG',
+  );
 }
 
 function trialOutOfOrder({ step, planes }: LoadedJob, planeId: number): Result<never> | null {
@@ -86,18 +108,4 @@ function trialOutOfOrder({ step, planes }: LoadedJob, planeId: number): Result<n
   if (step.planeId === planeId) return null;
   const due = planes.find((plane) => plane.id === step.planeId);
   return fail('other-plane', `The next trial weight goes in plane ${due?.name ?? ''}.`, 'planeId');
-}
-
-async function resolvePlace(em: EntityManager, input: Input) {
-  const plane = await em.findOneOrFail(Plane, { id: input.planeId });
-  const position =
-    input.positionId === null
-      ? null
-      : await em.findOne(Position, { id: input.positionId, plane: plane.id });
-  if (input.positionId !== null && !position)
-    return fail('other-plane', 'This position is not in that plane.', 'positionId');
-  if (plane.kind === 'fixed positions' && !position)
-    return fail('input', `Plane ${plane.name} has fixed positions: choose one.`, 'positionId');
-  const angle = placeOfWeight({ ...input, position });
-  return angle.ok ? ok({ plane, position, angleDeg: angle.value }) : angle;
 }

@@ -1,12 +1,13 @@
 import 'server-only';
 import type { EntityManager } from '@mikro-orm/postgresql';
-import { Run, RunVector, type WeightOnRotor } from '@/entities/balance-job';
+import { Run, RunVector } from '@/entities/balance-job';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { recordRunInput } from '@/lib/schemas/balance-job-input';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
 import { recordCautions } from '../balance-job/record-cautions';
 import { jobVectors, type JobVector } from '../balance-job/run-vectors';
 import { speedDoubt } from '../balance-job/speed-doubt';
+import { changedOnRotor } from '../balance-job/weights-on-rotor';
 import { command } from '../command';
 import { notFound, visibleJob } from '../scope';
 
@@ -33,7 +34,7 @@ export const recordRun = command(
       takenAt: now,
       speedRpm: input.speedRpm,
       setup: job.setup,
-      weightsState: weightsOn(loaded),
+      weightsState: changedOnRotor(loaded),
       state: doubt ? 'held' : 'kept',
       stateReason: doubt,
       person: actor.personId,
@@ -70,8 +71,11 @@ function outOfOrder(loaded: LoadedJob, purpose: 'base' | 'trial' | 'check'): Res
     return fail('closed', 'This job is closed. Open a new one for further runs.');
   const expected = { base: ['base'], trial: ['trial run'], check: ['fit correction', 'decide'] };
   if (!expected[purpose].includes(step)) return fail('out-of-order', OUT_OF_ORDER[purpose]);
-  const corrections = loaded.weights.some((w) => w.purpose === 'correction');
-  if (purpose === 'check' && step === 'fit correction' && !corrections)
+  const answeredAt = loaded.answers.at(-1)?.acceptedAt ?? loaded.job.openedAt;
+  const corrected =
+    loaded.weights.some((w) => w.purpose === 'correction') ||
+    loaded.removed.some(({ endedAt }) => endedAt && endedAt >= answeredAt);
+  if (purpose === 'check' && step === 'fit correction' && !corrected)
     return fail('out-of-order', 'Record what was fitted first, then the check run.');
   return null;
 }
@@ -81,18 +85,6 @@ const OUT_OF_ORDER = {
   trial: 'No trial weight waits for its run. Follow the next step on the run sheet.',
   check: 'A check run comes after the answer was accepted and the weights were recorded.',
 } as const;
-
-function weightsOn(loaded: LoadedJob): WeightOnRotor[] {
-  return loaded.weights
-    .filter((weight) => weight.endedAt === null)
-    .map((weight) => ({
-      weightId: weight.id,
-      planeId: weight.plane.id,
-      massG: weight.massG,
-      radiusMm: weight.radiusMm,
-      angleDeg: weight.angleDeg,
-    }));
-}
 
 function saveVectors(em: EntityManager, run: Run, vectors: JobVector[]) {
   for (const vector of vectors) {

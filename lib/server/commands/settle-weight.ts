@@ -16,12 +16,12 @@ export const settleTrial = command(
     const found = await openWeight(context, input);
     if (!found.ok) return found;
     const { job, weight } = found.value;
-    if (weight.purpose !== 'trial')
+    if (weight.purpose !== 'trial' || weight.job?.id !== job.id)
       return fail('not-a-trial', 'Only a trial weight is asked about after its run.');
     if (weight.stays !== null && weight.stays !== undefined)
       return fail('already', 'This question was answered a moment ago. Reload the page.');
     weight.stays = input.stays === 'stays on';
-    if (!weight.stays) end(context, weight, 'trial weight taken off after its run');
+    if (!weight.stays) end(context, found.value, 'trial weight taken off after its run');
     noteCautions(em, context, job, weight, input.namedPerson);
     audit({
       siteId: job.site.id,
@@ -34,7 +34,7 @@ export const settleTrial = command(
   },
 );
 
-/** Ends a weight of the job in the ledger: it is not on the rotor any more. */
+/** Ends a weight in the ledger, of this job or an earlier one: it is not on the rotor any more. */
 export const takeOffWeight = command(
   { name: 'takeOffWeight', permission: 'balanceJob:record', input: takeOffWeightInput },
   async (context, input) => {
@@ -42,8 +42,8 @@ export const takeOffWeight = command(
     const found = await openWeight(context, input);
     if (!found.ok) return found;
     const { job, weight } = found.value;
-    end(context, weight, input.reason);
-    if (weight.purpose === 'trial') weight.stays = false;
+    end(context, found.value, input.reason);
+    if (weight.purpose === 'trial' && weight.job?.id === job.id) weight.stays = false;
     noteCautions(em, context, job, weight, input.namedPerson);
     audit({
       siteId: job.site.id,
@@ -61,18 +61,22 @@ async function openWeight(context: CommandContext, input: { jobId: number; weigh
   const job = await visibleJob(context, input.jobId);
   if (!job) return notFound('balance job');
   if (job.closedAt) return fail('closed', 'This job is closed. Open a new one to change weights.');
-  const weight = await context.em.findOne(Weight, { id: input.weightId, job: job.id });
-  if (!weight) return notFound('weight of this job');
+  const weight = await context.em.findOne(Weight, { id: input.weightId, rotor: job.rotor.id });
+  if (!weight) return notFound('weight on this rotor');
   if (weight.endedAt) return fail('already', 'This weight is already recorded as off the rotor.');
   return ok({ job, weight });
 }
 
-function end({ actor, em, now }: CommandContext, weight: Weight, reason: string) {
+type Found = { job: BalanceJob; weight: Weight };
+
+/** A weight of an earlier job is ended in this one: the arithmetic counts it from then on. */
+function end({ actor, em, now }: CommandContext, { job, weight }: Found, reason: string) {
   em.assign(weight, {
     endedAt: now,
     ending: 'taken off',
     endedBy: actor.personId,
     endReason: reason,
+    endedInJob: weight.job?.id === job.id ? null : job.id,
   });
 }
 

@@ -14,6 +14,7 @@ import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
 import { recordCautions } from '../balance-job/record-cautions';
+import { changedOnRotor } from '../balance-job/weights-on-rotor';
 import { command, type CommandContext } from '../command';
 import { balanceJobDto } from '../queries/balance-job';
 import { notFound, visibleJob } from '../scope';
@@ -86,11 +87,11 @@ function notReady(loaded: LoadedJob, input: Input): Result<never> | null {
   return null;
 }
 
-function hasChangedSinceCheck({ runs, weights }: LoadedJob): boolean {
-  const check = runs.findLast(({ run }) => run.purpose === 'check' && run.state === 'kept');
+function hasChangedSinceCheck(loaded: LoadedJob): boolean {
+  const check = loaded.runs.findLast(({ run }) => run.purpose === 'check' && run.state === 'kept');
   const checked = new Set(check?.run.weightsState.map(({ weightId }) => weightId));
-  const on = weights.filter(({ endedAt }) => endedAt === null);
-  return on.length !== checked.size || on.some(({ id }) => !checked.has(id));
+  const now = changedOnRotor(loaded);
+  return now.length !== checked.size || now.some(({ weightId }) => !checked.has(weightId));
 }
 
 function missedTargets(loaded: LoadedJob): string[] {

@@ -43,9 +43,11 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     points: points.map((point) => pointDto(point)),
     runs: loaded.runs.map((run) => runDto(run, names)),
     weights: weights.map((weight) => weightDto(weight)),
-    olderWeights: rotorWeights
-      .filter((weight) => weight.job?.id !== job.id)
-      .map((weight) => weightDto(weight)),
+    olderWeights: [
+      ...rotorWeights.filter((weight) => weight.job?.id !== job.id),
+      ...loaded.goneBefore,
+      ...loaded.removed,
+    ].map((weight) => weightDto(weight)),
     choices: await choicesOf(em, loaded),
     step: loaded.step,
     repeats: baseRepeats(loaded),

@@ -3,6 +3,7 @@ import { Run } from '@/entities/balance-job';
 import { Weight } from '@/entities/weight';
 import { acceptAnswer } from '@/lib/server/commands/accept-answer';
 import { acceptBase } from '@/lib/server/commands/accept-base';
+import { correctLedger, recordFoundWeight } from '@/lib/server/commands/correct-ledger';
 import { fitWeight } from '@/lib/server/commands/fit-weight';
 import { openBalanceJob } from '@/lib/server/commands/open-balance-job';
 import { recordRun } from '@/lib/server/commands/record-run';
@@ -169,6 +170,25 @@ export const cases: OtherSiteCase[] = [
     expects: 'not-found',
     run: async (foreigner, plant) =>
       withdrawReuse(foreigner, { jobId: (await homeJob(plant)).jobId, reason: 'x' }),
+  },
+  {
+    name: 'correctLedger',
+    expects: 'not-found',
+    run: async (foreigner, plant) =>
+      correctLedger(foreigner, {
+        ...{ jobId: (await homeJob(plant)).jobId, weightId: 1, found: 'missing', reason: 'x' },
+        ...{ massG: '', standingStill: 'on', namedPerson: 'x' },
+      }),
+  },
+  {
+    name: 'recordFoundWeight',
+    expects: 'not-found',
+    run: async (foreigner, plant) =>
+      recordFoundWeight(foreigner, {
+        ...{ jobId: (await homeJob(plant)).jobId, planeId: plant.home.planeIds[0], massG: '5' },
+        ...{ radiusMm: '700', angleDeg: '10', angleSense: 'against', arcMm: '', fixing: 'bolt' },
+        ...{ standingStill: 'on', namedPerson: 'x' },
+      }),
   },
   {
     name: 'signJob',

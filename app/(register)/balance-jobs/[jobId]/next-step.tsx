@@ -118,6 +118,18 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
         );
       })}
       <AsFittedPanel job={job} />
+      {job.planes
+        .filter(({ id }) => !planeIds.includes(id))
+        .map((plane) => (
+          <details key={plane.id} className="panel p-4">
+            <summary className="target cursor-pointer font-semibold">
+              Another weight in plane {plane.name}…
+            </summary>
+            <div className="mt-4">
+              <WeightForm job={job} plane={plane} purpose="correction" proposedG={null} />
+            </div>
+          </details>
+        ))}
       {fitted && (
         <Panel
           title={planeIds.length === 0 ? 'Next: check run' : 'or, if nothing goes there: check run'}

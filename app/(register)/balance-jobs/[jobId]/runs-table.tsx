@@ -114,8 +114,14 @@ function reading(run: RunDto, pointId: number): string {
 
 function weightsOf(job: BalanceJobDto, run: RunDto): string {
   const on = job.weights.filter(({ id }) => run.weightIds.includes(id));
-  if (on.length === 0) return 'nothing';
-  return on
-    .map((w) => `${w.planeName}: ${formatMass(w.massG)} at ${formatRotorAngle(w.angleDeg)}`)
-    .join('; ');
+  const gone = job.olderWeights.filter(({ id }) => run.weightIds.includes(id));
+  if (on.length + gone.length === 0) return 'nothing';
+  return [
+    ...on.map((weight) => inWords(weight)),
+    ...gone.map((weight) => `${inWords(weight)} taken off`),
+  ].join('; ');
+}
+
+function inWords({ planeName, massG, angleDeg }: BalanceJobDto['weights'][number]): string {
+  return `${planeName}: ${formatMass(massG)} at ${formatRotorAngle(angleDeg)}`;
 }

@@ -10,6 +10,7 @@ import { CAUTIONS } from '@/lib/domain/cautions';
 import { formatDateTime, formatMass, formatQuantity, formatRotorAngle } from '@/lib/format';
 import type { BalanceJobDto, LedgerWeightDto } from '@/lib/schemas/balance-job';
 import { takeOffWeightAction } from './actions';
+import { FoundWeight, NotAsListed } from './ledger-check';
 import { StepForm } from './step-form';
 
 type WeightsTableProps = { job: BalanceJobDto; mayRecord: boolean };
@@ -17,8 +18,26 @@ type WeightsTableProps = { job: BalanceJobDto; mayRecord: boolean };
 /** The job's part of the weights ledger: what was hung on, what became of it, and who did it. */
 export function WeightsTable({ job, mayRecord }: WeightsTableProps) {
   const all = [...job.olderWeights, ...job.weights];
-  if (all.length === 0)
-    return <p className="text-ink-soft">No weight is on this rotor’s ledger.</p>;
+  const open = mayRecord && job.closedAt === null;
+  return (
+    <div className="flex flex-col gap-3">
+      {all.length === 0 ? (
+        <p className="text-ink-soft">No weight is on this rotor’s ledger.</p>
+      ) : (
+        <Ledger job={job} open={open} weights={all} />
+      )}
+      {open && (
+        <div>
+          <FoundWeight job={job} />
+        </div>
+      )}
+    </div>
+  );
+}
+
+type LedgerProps = { job: BalanceJobDto; open: boolean; weights: readonly LedgerWeightDto[] };
+
+function Ledger({ job, open, weights }: LedgerProps) {
   return (
     <Table caption="Weights ledger" captionShown>
       <thead>
@@ -33,7 +52,7 @@ export function WeightsTable({ job, mayRecord }: WeightsTableProps) {
         </tr>
       </thead>
       <tbody>
-        {all.map((weight) => (
+        {weights.map((weight) => (
           <tr key={weight.id} className={weight.endedAt ? 'text-ink-soft' : ''}>
             <RowHead>{weight.planeName}</RowHead>
             <Td numeric>{formatMass(weight.massG, job.site.decimalMark)}</Td>
@@ -51,7 +70,7 @@ export function WeightsTable({ job, mayRecord }: WeightsTableProps) {
             </Td>
             <Td>
               {stateOf(weight)}
-              {mayRecord && canEnd(job, weight) && <TakeOff job={job} weight={weight} />}
+              {open && weight.endedAt === null && <WeightActions job={job} weight={weight} />}
             </Td>
           </tr>
         ))}
@@ -91,9 +110,14 @@ function TakeOff({ job, weight }: { job: BalanceJobDto; weight: LedgerWeightDto 
   );
 }
 
-function canEnd(job: BalanceJobDto, weight: LedgerWeightDto): boolean {
-  const own = job.weights.some(({ id }) => id === weight.id);
-  return own && job.closedAt === null && weight.endedAt === null;
+function WeightActions({ job, weight }: { job: BalanceJobDto; weight: LedgerWeightDto }) {
+  const older = !job.weights.some(({ id }) => id === weight.id);
+  return (
+    <div className="flex flex-wrap gap-1">
+      <TakeOff job={job} weight={weight} />
+      {older && <NotAsListed job={job} weight={weight} />}
+    </div>
+  );
 }
 
 function stateOf(weight: LedgerWeightDto): string {
