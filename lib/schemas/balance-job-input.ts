@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { SLIPS } from '@/lib/domain/balance-job/slip-repair';
 import { id, optionalNumber, text, tick, typedNumber } from './number';
 
 const ids = z.preprocess(
@@ -176,6 +177,14 @@ export const recordFoundWeightInput = z.object({
     'Look at the rotor only when it stands still and is locked out. Tick it.',
   ),
   namedPerson: namedPerson('who locked the machine out'),
+});
+
+export const confirmSlipInput = z.object({
+  jobId: id,
+  /** The check run that was looked at, so that a newer one is never repaired by mistake. */
+  runId: id,
+  slip: z.enum(SLIPS),
+  reason: text('who looked, and what was seen', 1000),
 });
 
 export const acceptAnswerInput = z.object({

@@ -97,6 +97,8 @@ export type RunDto = {
   speedRpm: number;
   state: 'kept' | 'held' | 'lined through';
   stateReason: string | null;
+  /** Number of the run that this one corrects; null for a run that was made. */
+  corrects: number | null;
   person: string;
   vectors: RunVectorDto[];
   /** Ids of the job's weights that were on the rotor. */
@@ -193,7 +195,10 @@ export type CheckVerdict = {
 };
 
 /** One slip supposed, and how far the check run would be from what it makes expected. */
-export type SlipExplanation = Pick<SlipTest, 'slip' | 'words' | 'miss' | 'inside'>;
+export type SlipExplanation = Pick<SlipTest, 'slip' | 'words' | 'miss' | 'inside'> & {
+  /** A person may say that this is what happened. */
+  confirmable: boolean;
+};
 
 /** A plane as asked for and as recorded, as one weight at the plane's radius, against rotation. */
 export type AsFittedPlane = {

@@ -1,8 +1,11 @@
 import 'server-only';
+import type { Answer } from '@/entities/answer';
+import type { Run } from '@/entities/balance-job';
+import type { JobInput } from '@/lib/domain/balancing/job-input';
 import { missOf, predictRun } from '@/lib/domain/balancing/predict-run';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
 import type { CheckVerdict } from '@/lib/schemas/balance-job';
-import { fittedWeights } from './job-input';
+import { fittedWeights, jobInput } from './job-input';
 import type { LoadedJob, LoadedRun } from './load-job';
 
 type Predicted = ReturnType<typeof predictRun>;
@@ -47,12 +50,23 @@ function expectation(predicted: Predicted | null, misses: Misses, pointId: numbe
 }
 
 /** What the answer before this run said about the weights that were really on. */
-function predictedFor({ answers }: LoadedJob, { run }: LoadedRun): Predicted | null {
-  const answer = answers.findLast(({ afterRunNumber }) => afterRunNumber < run.number);
+function predictedFor(loaded: LoadedJob, { run }: LoadedRun): Predicted | null {
+  const answer = loaded.answers.findLast(({ afterRunNumber }) => afterRunNumber < run.number);
   if (!answer) return null;
-  const solution = solveJob(answer.inputs);
+  const input = inputsOf(loaded, answer, run);
+  const solution = solveJob(input);
   if (!solution.ok) return null;
-  return predictRun(solution.value, answer.inputs, fittedWeights(run.weightsState));
+  return predictRun(solution.value, input, fittedWeights(run.weightsState));
+}
+
+/** Where runs behind the answer were corrected since, the prediction follows from the corrected ones. */
+function inputsOf(loaded: LoadedJob, answer: Answer, check: Run): JobInput {
+  const corrected = loaded.runs.some(
+    ({ run }) => run.replaces && run.purpose !== 'check' && run.createdAt > answer.acceptedAt,
+  );
+  if (!corrected) return answer.inputs;
+  const before = loaded.runs.filter(({ run }) => run.takenAt < check.takenAt);
+  return jobInput({ ...loaded, runs: before }, before.at(-1)?.run.weightsState ?? []);
 }
 
 function vectorsOf({ vectors }: LoadedRun) {

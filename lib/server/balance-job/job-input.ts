@@ -10,7 +10,10 @@ import type { LoadedJob, LoadedRun } from './load-job';
 import { changedOnRotor } from './weights-on-rotor';
 
 /** What the arithmetic needs of a job: its kept runs, and what hangs on the rotor now. */
-export function jobInput(loaded: LoadedJob): JobInput {
+export function jobInput(
+  loaded: LoadedJob,
+  on: readonly WeightOnRotor[] = changedOnRotor(loaded),
+): JobInput {
   const { job, planes, points } = loaded;
   const kept = loaded.runs.filter(({ run }) => run.state === 'kept');
   return {
@@ -18,7 +21,7 @@ export function jobInput(loaded: LoadedJob): JobInput {
     planes: planes.map(({ id, name, radiusMm, fromAM }) => ({ id, name, radiusMm, fromAM })),
     points: points.map(({ id, label }) => ({ id, label })),
     runs: kept.map(jobRun),
-    weightsNow: weightsNow(loaded),
+    weightsNow: fittedWeights(on),
     coefficientsFrom: coefficientSource(loaded),
     rotor: jobRotor(loaded),
   };

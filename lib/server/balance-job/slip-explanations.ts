@@ -1,5 +1,6 @@
 import 'server-only';
 import type { FittedWeight } from '@/lib/domain/balancing/job-input';
+import { isSlip } from '@/lib/domain/balance-job/slip-repair';
 import { slipTests } from '@/lib/domain/balancing/slip-tests';
 import { weightsKey } from '@/lib/domain/balancing/weight-steps';
 import type { CheckVerdict, PlaneDto, SlipExplanation } from '@/lib/schemas/balance-job';
@@ -8,6 +9,9 @@ import type { LoadedJob, LoadedRun } from './load-job';
 
 /** Without a known band a miss counts from this share of the base reading up (practice). */
 const MISSED_SHARE_OF_BASE = 0.2;
+
+/** Without a known band a slip explains a miss that it makes less than a third (practice). */
+const EXPLAINED_SHARE = 1 / 3;
 
 /**
  * How well each common slip explains a check run that was not as predicted, best first; empty where it
@@ -18,8 +22,8 @@ export function slipExplanations(
   planes: readonly PlaneDto[],
   verdict: CheckVerdict | null,
 ): SlipExplanation[] {
-  const check = loaded.runs.find(({ run }) => run.id === verdict?.runId);
-  if (check?.run.state !== 'kept' || !verdict?.points.some(isMissed)) return [];
+  const check = missedCheck(loaded, verdict);
+  if (!check) return [];
   const tests = slipTests({
     job: jobInput(loaded),
     checkRunId: check.run.id,
@@ -27,7 +31,18 @@ export function slipExplanations(
     pitchDeg: pitchOf(planes),
   });
   if (!tests.ok) return [];
-  return tests.value.map(({ slip, words, miss, inside }) => ({ slip, words, miss, inside }));
+  const entered = tests.value.find(({ slip }) => slip === 'as entered')?.miss ?? 0;
+  return tests.value.map(({ slip, words, miss, inside }) => ({
+    ...{ slip, words, miss, inside },
+    confirmable: isSlip(slip) && (inside ?? miss < EXPLAINED_SHARE * entered),
+  }));
+}
+
+/** The check run that was not as predicted, or null. */
+export function missedCheck(loaded: LoadedJob, verdict: CheckVerdict | null): LoadedRun | null {
+  const check = loaded.runs.find(({ run }) => run.id === verdict?.runId);
+  if (check?.run.state !== 'kept' || !verdict?.points.some(isMissed)) return null;
+  return check;
 }
 
 function isMissed({ miss, band, before }: CheckVerdict['points'][number]): boolean {
@@ -44,7 +59,7 @@ function fittedFor({ runs }: LoadedJob, { run }: LoadedRun): FittedWeight[] {
 }
 
 /** Degrees from one fixed position to the next, where every plane has as many; otherwise none. */
-function pitchOf(planes: readonly PlaneDto[]): number | null {
+export function pitchOf(planes: readonly PlaneDto[]): number | null {
   const counts = new Set(planes.map(({ positions }) => positions.length));
   const [count = 0] = counts;
   return counts.size === 1 && count > 1 ? 360 / count : null;

@@ -41,7 +41,7 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     limits: await limitsOf(em, job.machine.id),
     planes,
     points: points.map((point) => pointDto(point)),
-    runs: loaded.runs.map((run) => runDto(run, names)),
+    runs: loaded.runs.map((run) => runDto(run, names, loaded.runs)),
     weights: weights.map((weight) => weightDto(weight)),
     olderWeights: [
       ...rotorWeights.filter((weight) => weight.job?.id !== job.id),
@@ -113,7 +113,7 @@ function headOf({ job }: LoadedJob, names: Names) {
   };
 }
 
-function runDto({ run, vectors }: LoadedRun, names: Names): RunDto {
+function runDto({ run, vectors }: LoadedRun, names: Names, runs: readonly LoadedRun[]): RunDto {
   return {
     id: run.id,
     number: run.number,
@@ -122,6 +122,7 @@ function runDto({ run, vectors }: LoadedRun, names: Names): RunDto {
     speedRpm: run.speedRpm,
     state: run.state,
     stateReason: run.stateReason ?? null,
+    corrects: runs.find((one) => one.run.id === run.replaces?.id)?.run.number ?? null,
     person: names.get(run.person.id) ?? '',
     vectors: vectors.map((vector) => ({
       pointId: vector.point.id,

@@ -14,6 +14,13 @@ import { balanceJob } from '@/lib/server/queries/balance-job';
 import type { SeededMachine } from '@/tests/support/plant';
 
 type Polar = { amp: number; deg: number };
+type Hung = {
+  g: number;
+  radius_mm: number;
+  deg: number;
+  sense?: 'against' | 'with';
+  positionId?: number | undefined;
+};
 type OpenInput = z.input<typeof openBalanceJobInput>;
 
 /** The value of a success; throws the sentence of a failure. */
@@ -82,15 +89,12 @@ export class JobDriver {
     valueOf(await acceptBase(this.actor, { jobId: this.jobId, reason }));
   }
 
-  async fit(
-    purpose: 'trial' | 'correction',
-    plane: number,
-    weight: { g: number; radius_mm: number; deg: number; sense?: 'against' | 'with' },
-  ) {
+  async fit(purpose: 'trial' | 'correction', plane: number, weight: Hung) {
     return fitWeight(this.actor, {
       jobId: this.jobId,
       purpose,
       planeId: this.machine.planeIds[plane],
+      positionId: weight.positionId ?? '',
       massG: String(weight.g),
       massSource: 'scale',
       radiusMm: String(weight.radius_mm),

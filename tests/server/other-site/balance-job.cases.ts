@@ -3,6 +3,7 @@ import { Run } from '@/entities/balance-job';
 import { Weight } from '@/entities/weight';
 import { acceptAnswer } from '@/lib/server/commands/accept-answer';
 import { acceptBase } from '@/lib/server/commands/accept-base';
+import { confirmSlip } from '@/lib/server/commands/confirm-slip';
 import { correctLedger, recordFoundWeight } from '@/lib/server/commands/correct-ledger';
 import { fitWeight } from '@/lib/server/commands/fit-weight';
 import { openBalanceJob } from '@/lib/server/commands/open-balance-job';
@@ -188,6 +189,14 @@ export const cases: OtherSiteCase[] = [
         ...{ jobId: (await homeJob(plant)).jobId, planeId: plant.home.planeIds[0], massG: '5' },
         ...{ radiusMm: '700', angleDeg: '10', angleSense: 'against', arcMm: '', fixing: 'bolt' },
         ...{ standingStill: 'on', namedPerson: 'x' },
+      }),
+  },
+  {
+    name: 'confirmSlip',
+    expects: 'not-found',
+    run: async (foreigner, plant) =>
+      confirmSlip(foreigner, {
+        ...{ jobId: (await homeJob(plant)).jobId, runId: 1, slip: 'not fitted', reason: 'x' },
       }),
   },
   {

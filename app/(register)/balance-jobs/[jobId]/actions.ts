@@ -3,6 +3,7 @@
 import { action } from '@/lib/server/action';
 import { acceptAnswer } from '@/lib/server/commands/accept-answer';
 import { acceptBase } from '@/lib/server/commands/accept-base';
+import { confirmSlip } from '@/lib/server/commands/confirm-slip';
 import { correctLedger, recordFoundWeight } from '@/lib/server/commands/correct-ledger';
 import { fitWeight } from '@/lib/server/commands/fit-weight';
 import { recordRun } from '@/lib/server/commands/record-run';
@@ -17,6 +18,7 @@ export const acceptBaseAction = action(acceptBase);
 export const fitWeightAction = action(fitWeight);
 export const reuseCoefficientsAction = action(reuseCoefficients);
 export const withdrawReuseAction = action(withdrawReuse);
+export const confirmSlipAction = action(confirmSlip);
 export const correctLedgerAction = action(correctLedger);
 export const recordFoundWeightAction = action(recordFoundWeight);
 export const settleTrialAction = action(settleTrial);

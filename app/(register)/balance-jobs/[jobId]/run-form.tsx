@@ -126,7 +126,8 @@ function PointReading({ job, point, index, state }: PointReadingProps) {
 function Starts({ job }: { job: BalanceJobDto }) {
   const { startsAllowed, runs } = job;
   if (startsAllowed === null) return null;
-  const next = runs.length + 1;
+  // A run that corrects another was no start of the machine.
+  const next = runs.filter(({ corrects }) => corrects === null).length + 1;
   const words = `This is start ${next}; ${formatPlural(startsAllowed, 'start')} were agreed.`;
   if (next <= startsAllowed) return <p>{words}</p>;
   return (

@@ -50,6 +50,9 @@ export function RunsTable({ job, may }: RunsTableProps) {
             ))}
             <Td>
               {weightsOf(job, run)}
+              {run.corrects !== null && (
+                <span className="inline-block text-xs">corrects run {run.corrects}</span>
+              )}
               {run.stateReason && (
                 <span className="inline-block text-xs">
                   {run.state}: {run.stateReason}

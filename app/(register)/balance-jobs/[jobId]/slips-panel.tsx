@@ -1,8 +1,15 @@
+'use client';
+
+import { Button } from '@/components/ui/button';
+import { Dialog } from '@/components/ui/dialog';
 import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
+import { TextAreaField } from '@/components/ui/text-area-field';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { formatNumber } from '@/lib/format';
-import type { BalanceJobDto } from '@/lib/schemas/balance-job';
+import type { BalanceJobDto, SlipExplanation } from '@/lib/schemas/balance-job';
+import { confirmSlipAction } from './actions';
+import { StepForm } from './step-form';
 
 const SHOWN = 6;
 
@@ -15,7 +22,7 @@ export function SlipsPanel({ job }: { job: BalanceJobDto }) {
       <div className="flex flex-col gap-3">
         <Notice kind="caution" title="Go and look before any more weight goes on">
           Each line supposes one slip and computes the check run again. One that fits is a question
-          to whoever was at the machine; nothing is changed by it.
+          to whoever was at the machine; nothing is changed until a person says what happened.
         </Notice>
         <Table caption="Slips supposed, best explanation first" roomy>
           <thead>
@@ -26,19 +33,47 @@ export function SlipsPanel({ job }: { job: BalanceJobDto }) {
             </tr>
           </thead>
           <tbody>
-            {slips.slice(0, SHOWN).map(({ slip, words, miss, inside }) => (
-              <tr key={slip}>
-                <RowHead>{words}</RowHead>
+            {slips.slice(0, SHOWN).map((told) => (
+              <tr key={told.slip}>
+                <RowHead>{told.words}</RowHead>
                 <Td numeric>
-                  {formatNumber(miss, { decimals: 2, decimalMark: site.decimalMark })}
+                  {formatNumber(told.miss, { decimals: 2, decimalMark: site.decimalMark })}
                 </Td>
-                <Td>{explains(inside)}</Td>
+                <Td>
+                  {explains(told.inside)}
+                  {told.confirmable && <Confirm job={job} told={told} />}
+                </Td>
               </tr>
             ))}
           </tbody>
         </Table>
       </div>
     </Panel>
+  );
+}
+
+function Confirm({ job, told }: { job: BalanceJobDto; told: SlipExplanation }) {
+  return (
+    <Dialog
+      title="Say what happened"
+      description={`${told.words} The entries that were wrong are kept, ended or lined through, and newer ones say what really was.`}
+      trigger={<Button variant="quiet">This is what happened…</Button>}
+    >
+      <StepForm jobId={job.id} action={confirmSlipAction} button="Put the records right">
+        {(state) => (
+          <>
+            <input type="hidden" name="slip" value={told.slip} />
+            <input type="hidden" name="runId" value={job.check?.runId ?? ''} />
+            <TextAreaField
+              name="reason"
+              label="Who looked, and what was seen?"
+              state={state}
+              rows={2}
+            />
+          </>
+        )}
+      </StepForm>
+    </Dialog>
   );
 }
 
