@@ -1,4 +1,5 @@
 import { defineEntity, p, type InferEntity } from '@mikro-orm/core';
+import { JOB_KINDS } from '@/lib/domain/balance-job/job-kinds';
 import { Machine } from './machine';
 import { MeasuredRecord } from './measured-record';
 import { Person } from './person';
@@ -28,14 +29,7 @@ export const BalanceJob = defineEntity({
     machine: () => p.manyToOne(Machine).ref(),
     rotor: () => p.manyToOne(Rotor).ref(),
     setup: () => p.manyToOne(Setup).ref(),
-    kind: p.enum([
-      'one-plane',
-      'two-plane',
-      'three or more planes',
-      'static only',
-      'couple only',
-      'check only',
-    ] as const),
+    kind: p.enum([...JOB_KINDS]),
     reason: p.string().length(1000),
     unit: p.enum(['mm/s rms', 'µm p-p'] as const),
     /** How this job's people read phase and count angles; converted once, at the edge. */

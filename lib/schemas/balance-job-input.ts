@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { JOB_KINDS, planesOf } from '@/lib/domain/balance-job/job-kinds';
 import { SLIPS } from '@/lib/domain/balance-job/slip-repair';
 import { id, optionalNumber, text, tick, typedNumber } from './number';
 
@@ -23,7 +24,7 @@ export const AMPLITUDE_UNITS = ['mm/s rms', 'mm/s pk', 'in/s pk', 'µm p-p', 'mi
 export const openBalanceJobInput = z
   .object({
     machineId: id,
-    kind: choice(['one-plane', 'two-plane'], 'Choose one or two correction planes.'),
+    kind: choice(JOB_KINDS, 'Say what is to be done: how many planes, or a check only.'),
     planeIds: ids,
     pointIds: ids,
     unit: choice(['mm/s rms', 'µm p-p'], 'Choose what the 1x readings of this job are kept in.'),
@@ -46,16 +47,29 @@ export const openBalanceJobInput = z
     standingSentence: mustTick('Read the caution and tick it.'),
   })
   .superRefine((job, context) => {
-    const wanted = job.kind === 'one-plane' ? 1 : 2;
-    if (new Set(job.planeIds).size !== wanted || job.planeIds.length !== wanted) {
-      const message = `Choose ${wanted === 1 ? 'one plane' : 'two planes'} for a ${job.kind} job.`;
+    const { least, most } = planesOf(job.kind);
+    const chosen = new Set(job.planeIds).size;
+    if (chosen < least || chosen > (most ?? chosen) || job.planeIds.length !== chosen) {
+      const message = `${planeWords(least, most)} for this kind of job (${job.kind}).`;
       context.addIssue({ code: 'custom', path: ['planeIds'], message });
     }
-    if (job.pointIds.length < wanted) {
-      const message = `Choose at least ${wanted === 1 ? 'one point' : 'two points'} to read in every run.`;
+    const points = Math.max(1, chosen, least);
+    if (job.pointIds.length < points) {
+      const message = `Choose at least ${countWords(points, 'point')} to read in every run.`;
       context.addIssue({ code: 'custom', path: ['pointIds'], message });
     }
   });
+
+const COUNTS = ['no', 'one', 'two', 'three'];
+
+function countWords(count: number, thing: string): string {
+  return `${COUNTS[count] ?? String(count)} ${thing}${count === 1 ? '' : 's'}`;
+}
+
+function planeWords(least: number, most: number | null): string {
+  if (most === 0) return 'Choose no plane';
+  return `Choose ${most === null ? `${countWords(least, 'plane')} or more` : countWords(least, 'plane')}`;
+}
 
 const runVectorInput = z
   .object({

@@ -31,6 +31,8 @@ export type StepJob = {
   readonly answerAfterRun: number | null;
   /** Coefficients of the book are used instead of trial runs. */
   readonly reusesBook: boolean;
+  /** Nothing is hung: the base runs are all there is. */
+  readonly checkOnly: boolean;
 };
 
 /** What comes next on the run sheet. */
@@ -53,7 +55,7 @@ export type Step =
  */
 export function nextStep(job: StepJob): Step {
   if (job.state === 'opened') return { step: 'base' };
-  if (job.state === 'base taken') return learningStep(job);
+  if (job.state === 'base taken') return job.checkOnly ? { step: 'decide' } : learningStep(job);
   if (job.state === 'answered') return correctingStep(job);
   return { step: 'closed' };
 }

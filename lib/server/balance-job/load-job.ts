@@ -98,6 +98,7 @@ function stepOf(loaded: Omit<LoadedJob, 'step'>): Step {
     answerNumber: newest?.number ?? null,
     answerAfterRun: newest?.afterRunNumber ?? null,
     reusesBook: loaded.reuse !== null,
+    checkOnly: loaded.job.kind === 'check only',
   });
 }
 

@@ -49,7 +49,7 @@ export const signJob = command(
       siteId: job.site.id,
       entity: 'BalanceJob',
       entityId: job.id,
-      before: { state: 'answered' },
+      before: { state: loaded.answers.length > 0 ? 'answered' : 'base taken' },
       after: { state: 'signed', contentHash, areaOwner: input.areaOwner },
       reason: input.reason || null,
     });
@@ -96,7 +96,7 @@ function hasChangedSinceCheck(loaded: LoadedJob): boolean {
 
 function missedTargets(loaded: LoadedJob): string[] {
   const check = checkVerdict(loaded);
-  if (!check) return [];
+  if (!check) return missedByBase(loaded);
   const { job } = loaded;
   const target = job.targets.oneX;
   const above = check.points.filter(({ now }) => target !== null && now > target);
@@ -111,6 +111,18 @@ function missedTargets(loaded: LoadedJob): string[] {
       : []),
     ...(off.length > 0 ? [`The check run is not as predicted at ${labels(off)}.`] : []),
   ];
+}
+
+/** A check only has its base runs and nothing else. */
+function missedByBase({ job, runs, points }: LoadedJob): string[] {
+  const last = runs.findLast(({ run }) => run.purpose === 'base' && run.state === 'kept');
+  const target = job.targets.oneX;
+  const above = points.filter(({ id }) => {
+    const vector = last?.vectors.find(({ point }) => point.id === id);
+    return target !== null && (vector?.amplitude ?? 0) > target;
+  });
+  if (above.length === 0) return [];
+  return [`The 1x target of ${target} ${job.unit} is missed at ${labels(above)}.`];
 }
 
 function labels(points: readonly { label: string }[]): string {
@@ -146,14 +158,18 @@ function keepEstimates(em: EntityManager, loaded: LoadedJob, now: Date) {
   }
 }
 
-function recordEvent({ em, actor, now }: CommandContext, { job, weights }: LoadedJob) {
+function recordEvent({ em, actor, now }: CommandContext, { job, weights, removed }: LoadedJob) {
   const on = weights.filter(({ endedAt }) => endedAt === null);
+  const hung = on.map(({ massG, plane }) => `${massG} g in plane ${plane.$.name}`).join(', ');
+  const changed = on.length + removed.length > 0;
   em.create(MachineEvent, {
     machine: job.machine,
     at: now,
-    kind: 'balance',
-    text: `Balanced, job ${job.number}: ${on.map(({ massG, plane }) => `${massG} g in plane ${plane.$.name}`).join(', ')}`,
-    breaksTrend: true,
+    kind: changed ? 'balance' : 'other',
+    text: changed
+      ? `Balanced, job ${job.number}: ${hung || 'older weights taken off'}`
+      : `Checked, job ${job.number}: nothing was hung`,
+    breaksTrend: changed,
     balanceJobId: job.id,
     person: actor.personId,
   });

@@ -9,6 +9,7 @@ const job = (over: Partial<StepJob>): StepJob => ({
   answerNumber: null,
   answerAfterRun: null,
   reusesBook: false,
+  checkOnly: false,
   ...over,
 });
 

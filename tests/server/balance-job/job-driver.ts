@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import { planesOf, type JobKind } from '@/lib/domain/balance-job/job-kinds';
 import type { Actor } from '@/lib/schemas/actor';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import type { openBalanceJobInput } from '@/lib/schemas/balance-job-input';
@@ -41,13 +42,13 @@ export class JobDriver {
   static async open(
     actor: Actor,
     machine: SeededMachine,
-    options: { kind: 'one-plane' | 'two-plane'; speedRpm: number } & Partial<OpenInput>,
+    options: { kind: JobKind; speedRpm: number } & Partial<OpenInput>,
   ): Promise<JobDriver> {
     const { kind, speedRpm, ...over } = options;
     const opened = await openBalanceJob(actor, {
       machineId: machine.machineId,
       kind,
-      planeIds: kind === 'one-plane' ? [machine.planeIds[0]] : [...machine.planeIds],
+      planeIds: [...machine.planeIds].slice(0, planesOf(kind).most ?? 2),
       pointIds: kind === 'one-plane' ? [machine.pointIds[0]] : [...machine.pointIds],
       unit: 'mm/s rms',
       phaseSense: 'lag',

@@ -142,6 +142,12 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
 }
 
 function Decide({ job }: { job: BalanceJobDto }) {
+  if (job.kind === 'check only')
+    return (
+      <Panel title="Next: sign what was read">
+        <SignForm job={job} />
+      </Panel>
+    );
   return (
     <>
       <Panel title="Check run">

@@ -9,6 +9,7 @@ import { Panel } from '@/components/ui/panel';
 import { RadioField } from '@/components/ui/radio-field';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextAreaField } from '@/components/ui/text-area-field';
+import type { JobKind } from '@/lib/domain/balance-job/job-kinds';
 import { CAUTIONS, STANDING_SENTENCE } from '@/lib/domain/cautions';
 import { IDLE, type ActionState } from '@/lib/schemas/action-state';
 import type { NewJobDto } from '@/lib/schemas/balance-job';
@@ -38,15 +39,7 @@ export function OpenJobForm({ dto }: { dto: NewJobDto }) {
       </Panel>
       <Panel title="What is balanced">
         <div className="flex flex-col gap-4">
-          <RadioField
-            name="kind"
-            label="Correction planes"
-            state={state}
-            choices={[
-              { value: 'one-plane', label: 'One plane' },
-              { value: 'two-plane', label: 'Two planes' },
-            ]}
-          />
+          <RadioField name="kind" label="What is to be done" state={state} choices={KINDS} />
           <PlaceChoices dto={dto} state={state} />
           <TextAreaField name="reason" label="Why is it balanced?" state={state} rows={2} />
         </div>
@@ -69,6 +62,17 @@ export function OpenJobForm({ dto }: { dto: NewJobDto }) {
     </form>
   );
 }
+
+const KINDS = [
+  { value: 'one-plane', label: 'One plane', hint: 'a narrow wheel, or a static part only' },
+  { value: 'two-plane', label: 'Two planes', hint: 'the usual rotor between bearings' },
+  { value: 'three or more planes', label: 'Three or more planes' },
+  {
+    value: 'check only',
+    label: 'Check only',
+    hint: 'readings are taken and signed, nothing is hung',
+  },
+] satisfies { value: JobKind; label: string; hint?: string }[];
 
 function Conventions({ state }: { state: ActionState }) {
   return (
