@@ -1,4 +1,4 @@
-import type { Browser, Page } from 'playwright-core';
+import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import data from '@/tests/reference/data/balancing-scenarios.json';
 import {
@@ -9,7 +9,15 @@ import {
   WIDTHS,
 } from '@/tests/support/browser-page';
 import { openChromium } from '@/tests/support/chromium';
-import { openJob, settleTrial, signJob, typeRun, typeWeight } from './balance-journey';
+import {
+  acceptBase,
+  openJob,
+  settleTrial,
+  signJob,
+  typeRun,
+  typeWeight,
+  takeAnswer,
+} from './balance-journey';
 import { enterMachine, type TypedMachine } from './machine-journey';
 import { signInAs } from './people';
 
@@ -31,21 +39,6 @@ async function entered(machine: TypedMachine): Promise<string> {
   const address = await enterMachine(page, { ...machine, tag });
   await close();
   return address;
-}
-
-async function acceptBase(page: Page, why: string): Promise<void> {
-  await page.getByLabel(/Why you go on/).fill(why);
-  await page.getByRole('button', { name: 'Accept the base' }).click();
-}
-
-/** What the page says once the button of the answer stands there; then uses the answer. */
-async function useAnswer(page: Page, name: string): Promise<string> {
-  const use = page.getByRole('button', { name });
-  await use.waitFor();
-  await expectAccessible(page);
-  const said = await textOf(page);
-  await use.click();
-  return said;
 }
 
 describe('S01: one plane, three base runs, the trial taken off, one trim', () => {
@@ -72,10 +65,10 @@ describe('S01: one plane, three base runs, the trial taken off, one trim', () =>
     await typeWeight(page, 'Record trial weight in plane W', inputs.trial);
     await typeRun(page, 'Record trial run', [inputs.trial_run], inputs.trial_run.speed);
     await settleTrial(page, /taken off/);
-    expect(await useAnswer(page, 'Use this answer')).toContain('26.3 g at 36°');
+    expect(await takeAnswer(page, 'Use this answer')).toContain('26.3 g at 36°');
     await typeWeight(page, 'Record weight in plane W', inputs.installed_1);
     await typeRun(page, 'Record check run', [inputs.check_run_1], inputs.check_run_1.speed);
-    const trim = await useAnswer(page, 'Use this trim');
+    const trim = await takeAnswer(page, 'Use this trim');
     // 2.85 g at 297.1°, shown to a tenth each.
     expect(trim).toMatch(/2\.[89] g\s+297\.\d°/);
     await typeWeight(page, 'Record weight in plane W', inputs.installed_2);
@@ -122,7 +115,7 @@ describe('S02: two planes, both trials taken off', () => {
       await typeRun(page, 'Record trial run', trial.run);
       await settleTrial(page, /taken off/);
     }
-    const answer = await useAnswer(page, 'Use this answer');
+    const answer = await takeAnswer(page, 'Use this answer');
     expect(answer).toContain('92.2 g at 124°');
     expect(answer).toContain('72.5 g at 256°');
     // Arc along the rim: 2π·700 mm·123.9/360 = 1513.7 mm.
@@ -184,7 +177,7 @@ describe('S03: both trial weights stay on', () => {
       await typeRun(page, 'Record trial run', trial.run);
       await settleTrial(page, /stays on/);
     }
-    const answer = await useAnswer(page, 'Use this answer');
+    const answer = await takeAnswer(page, 'Use this answer');
     for (const plane of [...expected.to_add_with_trials_staying, ...expected.total_from_as_found])
       expect(answer).toContain(`${plane.g.toFixed(1)} g`);
     expect(answer).toContain('110.2 g at 206°');

@@ -1,4 +1,5 @@
 import type { Page } from 'playwright-core';
+import { expectAccessible, textOf } from '@/tests/support/browser-page';
 
 export type Reading = { amp: number; deg: number };
 export type TrialWeight = { g: number; radius_mm: number; deg: number };
@@ -85,4 +86,35 @@ export async function signJob(page: Page, why: string): Promise<void> {
   await form.getByLabel(/Why it is signed although/).fill(why);
   await sign.click();
   await sign.waitFor({ state: 'detached' });
+}
+
+/** Goes on with the base runs as they are. */
+export async function acceptBase(page: Page, why: string): Promise<void> {
+  await page.getByLabel(/Why you go on/).fill(why);
+  await page.getByRole('button', { name: 'Accept the base' }).click();
+}
+
+/** What the page says once the button of the answer stands there; then uses the answer. */
+export async function takeAnswer(page: Page, name: string): Promise<string> {
+  const use = page.getByRole('button', { name });
+  await use.waitFor();
+  await expectAccessible(page);
+  const said = await textOf(page);
+  await use.click();
+  return said;
+}
+
+/** The grams and degrees against rotation that the answer card asks for, plane by plane. */
+export async function askedOf(page: Page): Promise<{ g: number; deg: number }[]> {
+  const card = page.getByRole('table', { name: 'Add to what is on the rotor now' });
+  await card.waitFor();
+  const heads = await card.getByRole('columnheader').allInnerTexts();
+  const [mass, angle] = ['add', 'at, against rotation'].map((name) => heads.indexOf(name) - 1);
+  const rows = await card.locator('tbody tr').all();
+  return Promise.all(
+    rows.map(async (row) => {
+      const cells = await row.locator('td').allInnerTexts();
+      return { g: parseFloat(cells[mass ?? 0] ?? ''), deg: parseFloat(cells[angle ?? 0] ?? '') };
+    }),
+  );
 }
