@@ -257,6 +257,26 @@ export type ReuseDto = {
   lines: BookCoefficientDto[];
 };
 
+/** The answer put on the fixed positions of one plane: the best choice for each number of positions. */
+export type PlacementDto = {
+  planeId: number;
+  planeName: string;
+  pieceG: number;
+  /** So much may remain, g·mm. */
+  targetGmm: number;
+  failure: string | null;
+  choices: {
+    weights: { positionId: number; label: string; massG: number }[];
+    totalG: number;
+    residualGmm: number;
+    meetsTarget: boolean;
+    /** No other combination of as many positions leaves less. */
+    proven: boolean;
+    proposed: boolean;
+    expected: { label: string; amplitude: number }[];
+  }[];
+};
+
 /** A trial run against what the book knows of the same plane and point. */
 export type TrialComparisonDto = {
   planeName: string;
@@ -307,6 +327,8 @@ export type BalanceJobDto = {
   /** What the arithmetic says now: an answer to accept, or why there is none. */
   answer: AnswerDto | null;
   answerFailure: string | null;
+  /** The answer on the fixed positions of its planes; empty where planes are free. */
+  placements: PlacementDto[];
   /** Between fitting and the check run: what was recorded beside what was asked for. */
   asFitted: AsFittedDto | null;
   check: CheckVerdict | null;

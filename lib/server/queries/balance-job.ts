@@ -15,6 +15,7 @@ import { bookPart } from '../balance-job/book-dto';
 import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob, type LoadedRun } from '../balance-job/load-job';
+import { placements } from '../balance-job/placements';
 import { planeDtos, pointDto, setupDto, weightDto, weightsOnRotor } from '../balance-job/places';
 import { rotorAsItIsSince } from '../balance-job/run-vectors';
 import { slipExplanations } from '../balance-job/slip-explanations';
@@ -55,6 +56,7 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     ...book,
     trialProposal: trialProposal(loaded, offered),
     accepted: acceptedOf(loaded, names),
+    placements: placements(loaded, planes, rotorWeights),
     asFitted: asFitted(loaded),
     check,
     slips: slipExplanations(loaded, planes, check),

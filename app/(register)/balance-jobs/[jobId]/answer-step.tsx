@@ -6,6 +6,7 @@ import { TrialsAgainstBook } from '@/components/balancing/trials-against-book';
 import { Notice } from '@/components/ui/notice';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import { acceptAnswerAction } from './actions';
+import { Placements } from './placements';
 import { ReuseNote } from './book-panel';
 import { StepForm } from './step-form';
 
@@ -27,6 +28,7 @@ export function AnswerStep({ job }: { job: BalanceJobDto }) {
       {answer && (
         <>
           <AnswerCard job={job} answer={answer} />
+          <Placements job={job} />
           <StepForm
             jobId={job.id}
             action={acceptAnswerAction}

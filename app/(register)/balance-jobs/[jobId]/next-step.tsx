@@ -17,6 +17,7 @@ import { AsFittedPanel } from './as-fitted-panel';
 import { BaseStep } from './base-step';
 import { BookPanel } from './book-panel';
 import { CheckTable } from './check-table';
+import { Placements } from './placements';
 import { RunForm } from './run-form';
 import { SettleForm } from './settle-form';
 import { SignForm } from './sign-form';
@@ -99,7 +100,12 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
   return (
     <>
       <Panel title="Answer card" note={answer && `answer ${answer.number}`}>
-        {answer && <AnswerCard job={job} answer={answer} />}
+        {answer && (
+          <div className="flex flex-col gap-4">
+            <AnswerCard job={job} answer={answer} />
+            <Placements job={job} />
+          </div>
+        )}
       </Panel>
       {planeIds.map((planeId) => {
         const plane = job.planes.find(({ id }) => id === planeId);
@@ -111,7 +117,8 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
                 job={job}
                 plane={plane}
                 purpose="correction"
-                proposedG={proposed?.massG ?? null}
+                // On positions the plan above says what to hang; one mass would mislead.
+                proposedG={plane.kind === 'free' ? (proposed?.massG ?? null) : null}
               />
             </Panel>
           )
