@@ -19,12 +19,13 @@ import {
   typeRun,
   typeWeight,
   takeAnswer,
+  typeFound,
 } from './balance-journey';
 import { enterMachine, type TypedMachine } from './machine-journey';
 import { signInAs } from './people';
 
-// Scenario S05: invented plant; expected values computed by an independent implementation.
-const { S05 } = data.scenarios;
+// Scenarios S04 and S05: invented plant; expected values computed by an independent implementation.
+const { S04, S05 } = data.scenarios;
 
 let browser: Browser;
 
@@ -111,6 +112,76 @@ async function firstBalance(address: string, past: PastJob): Promise<void> {
   await typeRun(page, 'Record check run', [{ amp: 0, deg: 0 }], past.speed);
   await signJob(page, 'Hardly anything is left.');
   await close();
+}
+
+describe('seven blades with limits, two of them used already', () => {
+  it('names blades and pieces with the room that is left', async () => {
+    const [wheel] = S04.machine.planes;
+    if (!wheel) throw new Error('no wheel');
+    const address = await entered({
+      tag: 'AV',
+      speeds: { lowest: 960, highest: 1000, usual: S04.machine.speed_r_min },
+      massKg: S04.machine.rotor_mass_kg,
+      grade: S04.machine.balance_grade,
+      spanM: 1,
+      centreM: 0.5,
+      planes: [
+        {
+          ...{ name: 'B', radiusMm: wheel.radius_mm, fromAM: 0.5 },
+          fixed: {
+            ...{ positions: wheel.positions, firstDeg: wheel.blade_1_deg },
+            ...{ maxG: wheel.max_g_per_pad, pieceG: wheel.piece_g },
+          },
+        },
+      ],
+    });
+    const { page, errors, close } = await openPage(browser);
+    await signInAs(page, 'technician');
+    await openJob(page, address, 'One plane');
+    const at = { radius_mm: wheel.radius_mm };
+    // The machine form labels positions by number; the ledger check comes before the first run.
+    for (const [blade, g] of Object.entries(S04.machine.ledger_before))
+      await typeFound(page, { ...at, g, position: positionOf(blade) });
+    await typeRun(page, 'Record base run', [S04.inputs.base]);
+    await acceptBase(page, 'One base run.');
+    const trial = { ...at, g: S04.inputs.trial.g, position: positionOf('blade 1') };
+    await typeWeight(page, 'Record trial weight in plane B', trial);
+    await typeRun(page, 'Record trial run', [S04.inputs.trial.run]);
+    await settleTrial(page, /taken off/);
+    const proposed = page.getByRole('row', { name: /is proposed/ });
+    await proposed.waitFor();
+    const said = (await proposed.innerText()).replaceAll('\u00a0', ' ');
+    expect(said).toMatch(/2: 10\.0 g, .*3: 40\.0 g, .*4: 60\.0 g/);
+    expect(said).toContain('110.0 g');
+    expect(said).toContain('0.10');
+    await takeAnswer(page, 'Use this answer');
+    for (const [blade, g] of Object.entries(S04.inputs.installed)) {
+      await typeWeight(page, 'Record weight in plane B', { ...at, g, position: positionOf(blade) });
+      await page.getByRole('row', { name: new RegExp(`${g}.0.g.*correction`) }).waitFor();
+    }
+    await openAnother(page);
+    await typeWeight(page, 'Record weight in plane B', {
+      ...at,
+      g: 5,
+      position: positionOf('blade 4'),
+    });
+    await page
+      .getByText(/its limit is 60 g/)
+      .first()
+      .waitFor();
+    await typeRun(page, 'Record check run', [S04.inputs.check_run]);
+    await signJob(page, 'Small remaining miss.');
+    expect(errors).toEqual([]);
+    await close();
+  });
+});
+
+/** Positions are labelled by their number. */
+const positionOf = (blade: string) => `${blade.replace('blade ', '')},`;
+
+/** Once the plan is fitted the form for a further weight is folded away. */
+async function openAnother(page: Page): Promise<void> {
+  await page.getByText('Another weight in plane B…').click();
 }
 
 /** A rotor with two planes on 700 mm whose answers to a g·mm are known, and what it shows as found. */

@@ -1,8 +1,11 @@
-import type { Page } from 'playwright-core';
+import type { Locator, Page } from 'playwright-core';
 import { expectAccessible, textOf } from '@/tests/support/browser-page';
 
 export type Reading = { amp: number; deg: number };
-export type TrialWeight = { g: number; radius_mm: number; deg: number };
+/** Where a weight hangs: degrees against rotation, or a position by its label. */
+export type TrialWeight = { g: number; radius_mm: number } & (
+  { deg: number } | { position: string }
+);
 
 const NAME = 'Ida Berg';
 
@@ -60,10 +63,36 @@ export async function typeWeight(page: Page, button: string, weight: TrialWeight
   await form.getByLabel(/Mass that hangs there now/).fill(String(weight.g));
   await form.getByLabel('Radius to its centre of mass').fill(String(weight.radius_mm));
   await form.getByLabel('weighed on a scale').check();
-  await form.getByLabel('Angle from the mark').fill(String(weight.deg));
-  await form.getByLabel('against rotation').check();
+  await typePlace(form, weight);
   await form.getByLabel('Fixed by').fill('clamp with locked screw');
   await form.getByRole('button', { name: button }).click();
+}
+
+async function typePlace(form: Locator, weight: TrialWeight) {
+  if ('position' in weight) {
+    const option = form.getByRole('option', { name: weight.position });
+    const value = (await option.getAttribute('value')) ?? '';
+    await form.getByLabel('Position').selectOption(value);
+    return;
+  }
+  await form.getByLabel('Angle from the mark').fill(String(weight.deg));
+  await form.getByLabel('against rotation').check();
+}
+
+/** Puts a weight on the ledger that hangs on the rotor and is not listed. */
+export async function typeFound(page: Page, weight: TrialWeight) {
+  await page.getByRole('button', { name: 'Found one that is not listed…' }).click();
+  const dialog = page.getByRole('dialog');
+  await dialog.getByLabel('Mass, weighed or estimated').fill(String(weight.g));
+  await dialog.getByLabel('Radius to its centre of mass').fill(String(weight.radius_mm));
+  await typePlace(dialog, weight);
+  await dialog.getByLabel('Fixed by').fill('bolt');
+  await dialog.getByLabel('It stands still and is locked out.').check();
+  await dialog.getByLabel('Locked out by (name)').fill(NAME);
+  await dialog.getByRole('button', { name: 'Put it on the ledger' }).click();
+  await dialog.getByText('Saved').waitFor();
+  await page.keyboard.press('Escape');
+  await dialog.waitFor({ state: 'detached' });
 }
 
 /** Answers “is it still on the rotor?”, which has no default. */

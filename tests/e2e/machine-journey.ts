@@ -8,7 +8,13 @@ export type TypedMachine = {
   massKg: number;
   spanM: number;
   centreM: number;
-  planes: readonly { name: string; radiusMm: number; fromAM: number }[];
+  planes: readonly {
+    name: string;
+    radiusMm: number;
+    fromAM: number;
+    fixed?: { positions: number; firstDeg: number; maxG: number; pieceG: number };
+  }[];
+  grade?: number;
 };
 
 /** Enters a fan between bearings through its form and waits for its page; the address of that page. */
@@ -35,10 +41,13 @@ export async function enterMachine(page: Page, machine: TypedMachine): Promise<s
   return page.url();
 }
 
-async function typeRotor(page: Page, { tag, massKg, spanM, centreM, planes }: TypedMachine) {
+async function typeRotor(
+  page: Page,
+  { tag, massKg, spanM, centreM, planes, grade = 6.3 }: TypedMachine,
+) {
   await page.getByLabel('Serial number').fill(`${tag}-R1`);
   await page.getByLabel('Mass', { exact: true }).fill(String(massKg));
-  await page.getByLabel('Balance quality grade G').fill('6.3');
+  await page.getByLabel('Balance quality grade G').fill(String(grade));
   await page.getByLabel('Distance between bearings').fill(String(spanM));
   await page.getByLabel('Centre of mass, from bearing A').fill(String(centreM));
   await page.locator('[name="bearings.0.fromAM"]').fill('0');
@@ -48,5 +57,18 @@ async function typeRotor(page: Page, { tag, massKg, spanM, centreM, planes }: Ty
     await page.locator(`[name="planes.${index}.name"]`).fill(plane.name);
     await page.locator(`[name="planes.${index}.radiusMm"]`).fill(String(plane.radiusMm));
     await page.locator(`[name="planes.${index}.fromAM"]`).fill(String(plane.fromAM));
+    if (plane.fixed) await typePositions(page, index, plane.fixed);
   }
+}
+
+type Fixed = NonNullable<TypedMachine['planes'][number]['fixed']>;
+
+/** Positions numbered against rotation. */
+async function typePositions(page: Page, index: number, fixed: Fixed) {
+  const at = (name: string) => page.locator(`[name="planes.${index}.${name}"]`);
+  await at('positions').fill(String(fixed.positions));
+  await at('numbering').selectOption('against');
+  await at('firstDeg').fill(String(fixed.firstDeg));
+  await at('positionMaxG').fill(String(fixed.maxG));
+  await at('pieceG').fill(String(fixed.pieceG));
 }

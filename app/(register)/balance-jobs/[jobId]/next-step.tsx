@@ -8,10 +8,11 @@ import {
   formatDegrees,
   formatMass,
   formatNumber,
+  formatPlural,
   formatQuantity,
   formatRotorAngle,
 } from '@/lib/format';
-import type { BalanceJobDto } from '@/lib/schemas/balance-job';
+import type { BalanceJobDto, PlaneDto } from '@/lib/schemas/balance-job';
 import { AnswerStep } from './answer-step';
 import { AsFittedPanel } from './as-fitted-panel';
 import { BaseStep } from './base-step';
@@ -128,14 +129,7 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
       {job.planes
         .filter(({ id }) => !planeIds.includes(id))
         .map((plane) => (
-          <details key={plane.id} className="panel p-4">
-            <summary className="target cursor-pointer font-semibold">
-              Another weight in plane {plane.name}…
-            </summary>
-            <div className="mt-4">
-              <WeightForm job={job} plane={plane} purpose="correction" proposedG={null} />
-            </div>
-          </details>
+          <AnotherWeight key={plane.id} job={job} plane={plane} />
         ))}
       {fitted && (
         <Panel
@@ -145,6 +139,33 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
         </Panel>
       )}
     </>
+  );
+}
+
+/** A further weight for the same answer: in sight while the plan of the positions has more to hang. */
+function AnotherWeight({ job, plane }: { job: BalanceJobDto; plane: PlaneDto }) {
+  const since = job.accepted.at(-1)?.acceptedAt ?? '';
+  const hung = job.weights.filter(
+    ({ planeId, purpose, endedAt, fittedAt }) =>
+      planeId === plane.id && purpose === 'correction' && endedAt === null && fittedAt >= since,
+  );
+  const plan = job.placements
+    .find(({ planeId }) => planeId === plane.id)
+    ?.choices.find(({ proposed }) => proposed);
+  const toHang = (plan?.weights.length ?? 0) - hung.length;
+  return (
+    <Panel>
+      <details open={toHang > 0}>
+        <summary className="target cursor-pointer font-semibold">
+          {toHang > 0
+            ? `Next: fit card, plane ${plane.name}, ${formatPlural(toHang, 'weight')} to go`
+            : `Another weight in plane ${plane.name}…`}
+        </summary>
+        <div className="mt-4">
+          <WeightForm job={job} plane={plane} purpose="correction" proposedG={null} />
+        </div>
+      </details>
+    </Panel>
   );
 }
 
