@@ -7,10 +7,12 @@ import { staticAndCouple, sumOverTotal } from './residual-unbalance';
 import { coefficientMatrix, effectDeviations } from './response-model';
 import {
   solveCorrection,
+  solveCouplePair,
   solveMinMax,
   solveStaticPair,
   type CorrectionTask,
 } from './solve-correction';
+import { solveWithinLimits } from './solve-limited';
 import { polarUnbalance, unbalanceByPlane, type PolarUnbalance } from './weights-ledger';
 
 /** A weight that an answer asks for in one plane. */
@@ -31,7 +33,8 @@ export type PlaneAnswer = PolarUnbalance & {
 
 /** One way to correct, complete. */
 export type Answer = {
-  readonly kind: 'exact' | 'least squares' | 'min-max' | 'static pair';
+  readonly kind:
+    'exact' | 'least squares' | 'min-max' | 'static pair' | 'couple pair' | 'within limits';
   /** Add to what is on the rotor now. */
   readonly add: readonly PlaneAnswer[];
   /** What hangs there then of all fitted since the job began: the total from as-found. */
@@ -57,6 +60,20 @@ const SOLVERS: Readonly<Record<Answer['kind'], (task: CorrectionTask) => Result<
   'least squares': solveCorrection,
   'min-max': solveMinMax,
   'static pair': solveStaticPair,
+  'couple pair': solveCouplePair,
+  'within limits': solveWithinLimits,
+};
+
+type LinearKind = Exclude<Answer['kind'], 'min-max' | 'within limits'>;
+
+/** How readings carry into an answer: the nearest solution that is linear in them. */
+const LINEAR: Readonly<Record<Answer['kind'], LinearKind>> = {
+  exact: 'exact',
+  'least squares': 'least squares',
+  'min-max': 'least squares',
+  'within limits': 'least squares',
+  'static pair': 'static pair',
+  'couple pair': 'couple pair',
 };
 
 /**
@@ -72,7 +89,7 @@ export function buildAnswer(task: AnswerTask, kind: Answer['kind']): Result<Answ
   const solved = SOLVERS[kind](correction);
   if (!solved.ok) return solved;
   const added = solved.value;
-  const spread = uncertainties(task, kind === 'min-max' ? 'least squares' : kind, added);
+  const spread = uncertainties(task, LINEAR[kind], added);
   const onNow = unbalanceByPlane(
     basis.weightsNow,
     input.planes.map(({ id }) => id),
@@ -99,7 +116,7 @@ export function buildAnswer(task: AnswerTask, kind: Answer['kind']): Result<Answ
 /** Standard deviation of unbalance per plane, g·mm, that follows from readings alone; null if unknown. */
 export function uncertainties(
   task: AnswerTask,
-  kind: Exclude<Answer['kind'], 'min-max'>,
+  kind: LinearKind,
   added: readonly Complex[],
 ): (number | null)[] {
   const { input, basis } = task;
@@ -132,6 +149,9 @@ function correctionTask({ input, basis }: AnswerTask): CorrectionTask {
     }),
     coefficients: coefficientMatrix(basis.model, input),
     pointWeights: input.points.map(({ weight }) => weight ?? 1),
+    limitsGmm: input.planes.map(({ roomG, radiusMm }) =>
+      roomG === null || roomG === undefined ? null : roomG * radiusMm,
+    ),
   };
 }
 

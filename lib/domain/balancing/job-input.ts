@@ -4,6 +4,8 @@ export type JobPlane = {
   readonly name: string;
   readonly radiusMm: number;
   readonly fromAM?: number | null;
+  /** Mass that may still be hung there, g at this radius; null or left out: no limit. */
+  readonly roomG?: number | null;
 };
 
 /** A measuring point. `weight` says how much it counts in the answer (1 unless said otherwise). */
@@ -82,6 +84,8 @@ export type JobInput = {
   /** Known scatter of one reading in the job's unit, used where no run was repeated. */
   readonly scatter?: number | null;
   readonly rotor?: JobRotor | null;
+  /** With two planes: correct only the static or only the couple part. */
+  readonly only?: 'static' | 'couple' | null;
 };
 
 /** What a run is called in a sentence. */

@@ -84,7 +84,8 @@ function trialNotices(input: JobInput, { trials }: Known): JobNotice[] {
   });
 }
 
-function answerNotices(input: JobInput, { condition, answer, now }: Known): JobNotice[] {
+function answerNotices(input: JobInput, solution: Known): JobNotice[] {
+  const { condition, answer, now } = solution;
   const notices: JobNotice[] = [];
   if (condition.verdict === 'caution')
     notices.push({
@@ -97,6 +98,7 @@ function answerNotices(input: JobInput, { condition, answer, now }: Known): JobN
       message:
         'The weights of this answer mostly cancel each other. That is right for a couple, and a sign of doubt otherwise: compare with the static pair.',
     });
+  if (answer?.kind === 'within limits') notices.push(limitNotice(input, solution));
   const rising = input.points.filter(({ id }) => {
     const before = now.find(({ pointId }) => pointId === id)?.amplitude ?? 0;
     const after = answer?.predicted.find(({ pointId }) => pointId === id)?.amplitude ?? 0;
@@ -108,6 +110,21 @@ function answerNotices(input: JobInput, { condition, answer, now }: Known): JobN
       message: `This answer raises the reading at ${rising.map(({ label }) => label).join(', ')} by more than 20 %.`,
     });
   return notices;
+}
+
+function limitNotice(input: JobInput, { answer, alternatives }: Known): JobNotice {
+  const free = alternatives.find(({ kind }) => kind === 'exact' || kind === 'least squares');
+  const over = input.planes.flatMap(({ id, name, roomG }) => {
+    const asked = free?.add.find(({ planeId }) => planeId === id)?.massG ?? 0;
+    return roomG !== null && roomG !== undefined && asked > roomG
+      ? [`${asked.toFixed(0)} g in plane ${name}, where ${roomG.toFixed(0)} g may still be hung`]
+      : [];
+  });
+  const left = answer?.largestPredicted ?? 0;
+  return {
+    code: 'plane-limit',
+    message: `Without limits the answer asks for ${over.join(' and ')}. The best within the limits is given; it leaves up to ${left.toFixed(2)} ${input.unit} instead of ${(free?.largestPredicted ?? 0).toFixed(2)}. Take old weights off, or use a larger radius, for less.`,
+  };
 }
 
 function fitNotices(input: JobInput, solution: Known): JobNotice[] {

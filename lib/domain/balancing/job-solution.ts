@@ -49,6 +49,7 @@ export type JobNotice = {
     | 'trial-large'
     | 'condition'
     | 'opposing-weights'
+    | 'plane-limit'
     | 'misfit'
     | 'estimate-differs'
     | 'now-from-model'

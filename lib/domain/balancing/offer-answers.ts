@@ -9,6 +9,8 @@ import type { TrialCheck } from './trial-checks';
 const HEARD_ABOVE_SCATTER = 3;
 /** From here the planes are one and the same to the points. */
 const INDISTINGUISHABLE = 1e4;
+/** An answer within limits must lower the largest reading to this share of it, or less. */
+const WORTH_FITTING = 0.9;
 /** A change below this share of the reading is only rounding of the arithmetic. */
 const ROUNDING = 1e-9;
 
@@ -31,16 +33,53 @@ export function offerAnswers(
     return ok({ answer: null, alternatives: [], withheld: { failure: refused, answer: null } });
   const silent = silentTrial(task, learned.trials);
   if (silent) return { ok: false, failure: silent };
+  return bestOffer(task, learned.condition);
+}
+
+function bestOffer(task: AnswerTask, condition: Condition): Result<Offer> {
+  const { input } = task;
   const kind = input.points.length === input.planes.length ? 'exact' : 'least squares';
   const full = buildAnswer(task, kind);
   if (!full.ok) return full;
+  if (input.only) return partOnly(task, input.only, full.value);
   const pairs = input.planes.length > 1 ? built(task, 'static pair') : [];
-  if (learned.condition.verdict === 'withhold')
-    return ok(
-      withheldOffer(input, learned.condition, { full: full.value, pair: pairs[0] ?? null }),
-    );
+  if (condition.verdict === 'withhold')
+    return ok(withheldOffer(input, condition, { full: full.value, pair: pairs[0] ?? null }));
   const minMax = kind === 'exact' ? [] : built(task, 'min-max');
-  return ok({ answer: full.value, alternatives: [...minMax, ...pairs], withheld: null });
+  return ok(withinRoom(task, full.value, [...minMax, ...pairs]));
+}
+
+/** The answer, or the best one within the room of the planes where it asks for more. */
+function withinRoom(task: AnswerTask, full: Answer, others: readonly Answer[]): Offer {
+  const [limited] = isOver(task.input, full) ? built(task, 'within limits') : [];
+  if (!limited) return { answer: full, alternatives: others, withheld: null };
+  const now = Math.max(0, ...task.basis.now.map(({ amplitude }) => amplitude));
+  if (limited.largestPredicted < WORTH_FITTING * now)
+    return { answer: limited, alternatives: [full, ...others], withheld: null };
+  return { answer: null, alternatives: [], withheld: { failure: noRoom(task), answer: full } };
+}
+
+function noRoom({ input }: AnswerTask): Failure {
+  const rooms = input.planes.flatMap(({ name, roomG }) =>
+    typeof roomG === 'number' ? [`plane ${name} may carry ${roomG.toFixed(0)} g more`] : [],
+  );
+  return fail(
+    'no-room',
+    `Within the limits hardly anything can be gained: ${rooms.join(', ')}. Take weights off that hang there, or choose another plane or radius.`,
+  ).failure;
+}
+
+function partOnly(task: AnswerTask, only: 'static' | 'couple', full: Answer): Result<Offer> {
+  const pair = buildAnswer(task, only === 'static' ? 'static pair' : 'couple pair');
+  return pair.ok ? ok({ answer: pair.value, alternatives: [full], withheld: null }) : pair;
+}
+
+/** Whether an answer asks for more than a plane may still carry. */
+function isOver({ planes }: JobInput, { add }: Answer): boolean {
+  return planes.some(({ id, roomG }) => {
+    const asked = add.find(({ planeId }) => planeId === id)?.massG ?? 0;
+    return roomG !== null && roomG !== undefined && asked > roomG;
+  });
 }
 
 function built(task: AnswerTask, kind: Answer['kind']): Answer[] {

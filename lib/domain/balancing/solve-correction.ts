@@ -8,6 +8,8 @@ export type CorrectionTask = {
   readonly coefficients: ComplexMatrix;
   /** How much each point counts; 1 each where not given. */
   readonly pointWeights?: readonly number[];
+  /** The most that each plane may be given, g·mm; null: no limit. Kept by `solveWithinLimits` only. */
+  readonly limitsGmm?: readonly (number | null)[];
 };
 
 const MIN_MAX_ROUNDS = 400;
@@ -84,6 +86,27 @@ export function solveStaticPair(task: CorrectionTask): Result<Complex[]> {
   if (!answer.ok) return answer;
   const each = answer.value[0] ?? ZERO;
   return ok((task.coefficients[0] ?? []).map(() => each));
+}
+
+/**
+ * Unbalance that is equal and opposite in two planes and minimises the weighted residual: the couple
+ * part alone.
+ *
+ * @returns unbalance for the first and the second plane, g·mm, or a failure where there are not two planes
+ *   or a couple has no effect
+ * Source: least squares with one unknown.
+ */
+export function solveCouplePair(task: CorrectionTask): Result<Complex[]> {
+  const { coefficients, now } = weightRows(task);
+  if (coefficients.some((row) => row.length !== 2))
+    return fail('not-two-planes', 'A couple is corrected in two planes. Choose two.');
+  const apart = coefficients.map(([first = ZERO, second = ZERO]) => [
+    add(first, scale(second, -1)),
+  ]);
+  const answer = solveCorrection({ now, coefficients: apart });
+  if (!answer.ok) return answer;
+  const each = answer.value[0] ?? ZERO;
+  return ok([each, scale(each, -1)]);
 }
 
 /** What the points show after unbalance `added` (g·mm per plane): `V_now + H·C`. */

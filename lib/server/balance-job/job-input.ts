@@ -1,5 +1,6 @@
 import 'server-only';
 import type { WeightOnRotor } from '@/entities/balance-job';
+import type { JobKind } from '@/lib/domain/balance-job/job-kinds';
 import type {
   CoefficientSource,
   FittedWeight,
@@ -18,14 +19,23 @@ export function jobInput(
   const kept = loaded.runs.filter(({ run }) => run.state === 'kept');
   return {
     unit: job.unit,
-    planes: planes.map(({ id, name, radiusMm, fromAM }) => ({ id, name, radiusMm, fromAM })),
+    planes: planes.map(({ id, name, radiusMm, fromAM }) => ({
+      ...{ id, name, radiusMm, fromAM },
+      roomG: loaded.roomG.get(id) ?? null,
+    })),
     points: points.map(({ id, label }) => ({ id, label })),
     runs: kept.map(jobRun),
     weightsNow: fittedWeights(on),
     coefficientsFrom: coefficientSource(loaded),
     rotor: jobRotor(loaded),
+    only: ONLY[job.kind] ?? null,
   };
 }
+
+const ONLY: Partial<Record<JobKind, 'static' | 'couple'>> = {
+  'static only': 'static',
+  'couple only': 'couple',
+};
 
 /** A job that gave up the coefficient book after its first check run learns from all its own runs. */
 function coefficientSource({ reuse, answers }: LoadedJob): CoefficientSource {

@@ -26,6 +26,8 @@ export type LoadedJob = {
   removed: LoadedWeight[];
   /** Older weights that came off, or were found gone, before the first run: every run was without them. */
   goneBefore: LoadedWeight[];
+  /** Mass that each plane may still carry beside all that hangs there now, g; null without a limit. */
+  roomG: ReadonlyMap<number, number | null>;
   answers: Answer[];
   /** Coefficients of the book used instead of trial runs; null where there are none. */
   reuse: CoefficientReuse | null;
@@ -54,6 +56,7 @@ export async function loadJob(em: EntityManager, job: VisibleJob): Promise<Loade
     { orderBy: { id: 'asc' }, populate: ['plane', 'position', 'fittedBy', 'endedBy'] },
   );
   const answers = await em.find(Answer, { job: job.id }, { orderBy: { number: 'asc' } });
+  const onRotor = await em.find(Weight, { rotor: job.rotor.id, endedAt: null });
   const reuse = await em.findOne(CoefficientReuse, { job: job.id, withdrawnAt: null });
   const loaded = {
     job,
@@ -63,10 +66,17 @@ export async function loadJob(em: EntityManager, job: VisibleJob): Promise<Loade
     weights,
     removed: ended.filter(({ endedAt }) => isAfterFirst(runs, endedAt)),
     goneBefore: ended.filter(({ endedAt }) => !isAfterFirst(runs, endedAt)),
+    roomG: new Map(planes.map(({ plane }) => [plane.id, roomOf(plane.$, onRotor)])),
     answers,
     reuse,
   };
   return { ...loaded, step: stepOf(loaded) };
+}
+
+function roomOf({ id, maxGTotal }: Plane, onRotor: readonly Weight[]): number | null {
+  if (!maxGTotal) return null;
+  const hung = onRotor.filter(({ plane }) => plane.id === id);
+  return Math.max(0, maxGTotal - hung.reduce((total, { massG }) => total + massG, 0));
 }
 
 function isAfterFirst([first]: readonly Run[], endedAt: Date | null | undefined): boolean {

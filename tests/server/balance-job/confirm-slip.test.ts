@@ -203,8 +203,11 @@ describe('every other slip at the correction, once confirmed', () => {
     const after = await job.sheet();
     expect(after.slips).toEqual([]);
     for (const point of after.check?.points ?? []) expect(point.miss).toBeLessThan(0.01);
-    // What is said to hang there now answers the run, so that the trim leaves nothing.
-    for (const point of after.answer?.predicted ?? []) expect(point.amplitude).toBeLessThan(0.01);
+    // What is said to hang there now answers the run, so that the trim leaves nothing;
+    // with ten times the mass the planes are full.
+    if (name === 'mass ten times too large')
+      expect(after.answerFailure).toContain('Take weights off');
+    else expect(after.answer?.predicted.every(({ amplitude }) => amplitude < 0.01)).toBe(true);
   });
 
   it('lead read as lag: every typed phase is turned, and the instrument is known from then on', async () => {

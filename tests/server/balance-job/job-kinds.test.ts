@@ -78,6 +78,43 @@ describe('a check only', () => {
   });
 });
 
+describe('two planes, a part only', () => {
+  const base = [
+    { amp: 3.9, deg: 100 },
+    { amp: 3.2, deg: 200 },
+  ];
+  const answerOf = async (kind: 'static only' | 'couple only') => {
+    const job = await JobDriver.open(plant.at('technician'), await aMachine(), {
+      kind,
+      speedRpm: 990,
+    });
+    valueOf(await job.run('base', base));
+    await job.acceptBase('One base run.');
+    for (const plane of [0, 1])
+      await job.trial(
+        plane,
+        { g: 20, radius_mm: 700, deg: 0 },
+        {
+          readings: [
+            { amp: plane === 0 ? 3.1 : 3.8, deg: 110 },
+            { amp: plane === 0 ? 3.1 : 2.5, deg: 190 },
+          ],
+          stays: 'taken off',
+        },
+      );
+    return job.accept();
+  };
+
+  it('static only asks for the same in both planes, couple only for the opposite', async () => {
+    const [one, other] = (await answerOf('static only')).planes;
+    expect(one?.massG).toBeCloseTo(other?.massG ?? 0, 9);
+    expect(one?.angleDeg).toBeCloseTo(other?.angleDeg ?? 0, 9);
+    const [first, second] = (await answerOf('couple only')).planes;
+    expect(first?.massG).toBeCloseTo(second?.massG ?? 0, 9);
+    expect(Math.abs((first?.angleDeg ?? 0) - (second?.angleDeg ?? 0))).toBeCloseTo(180, 9);
+  });
+});
+
 describe('three planes', () => {
   /** Answers of three points to a g·mm in three planes, and what the points show as found. */
   const H = [

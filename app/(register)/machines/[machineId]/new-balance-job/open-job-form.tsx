@@ -66,6 +66,16 @@ export function OpenJobForm({ dto }: { dto: NewJobDto }) {
 const KINDS = [
   { value: 'one-plane', label: 'One plane', hint: 'a narrow wheel, or a static part only' },
   { value: 'two-plane', label: 'Two planes', hint: 'the usual rotor between bearings' },
+  {
+    value: 'static only',
+    label: 'Two planes, the static part only',
+    hint: 'one weight, the same in both',
+  },
+  {
+    value: 'couple only',
+    label: 'Two planes, the couple only',
+    hint: 'one weight, opposite in both',
+  },
   { value: 'three or more planes', label: 'Three or more planes' },
   {
     value: 'check only',
