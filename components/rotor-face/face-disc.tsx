@@ -95,7 +95,7 @@ function Hole({ position, seen, named }: HoleProps) {
           textAnchor="middle"
           className="figures fill-scribe text-[12px] font-bold"
         >
-          {position.label}
+          {shortLabel(position.label)}
         </text>
       )}
     </>
@@ -122,4 +122,9 @@ function Mark() {
       </text>
     </>
   );
+}
+
+/** Inside the disc there is room for a number only: “blade 3” is 3. */
+function shortLabel(label: string): string {
+  return /^\D+ (\d+)$/.exec(label)?.[1] ?? label;
 }

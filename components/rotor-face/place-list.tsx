@@ -45,10 +45,10 @@ function Ways({ plane, angleDeg }: { plane: FacePlane; angleDeg: number }) {
       {words.kind === 'at' && (
         <>
           {' '}
-          = <span className="font-semibold text-ink">position {words.label}</span>
+          = <span className="font-semibold text-ink">{named(words.label)}</span>
         </>
       )}
-      {words.kind === 'between' && ` = between positions ${words.from} and ${words.to}`}
+      {words.kind === 'between' && ` = between ${named(words.from)} and ${named(words.to)}`}
     </>
   );
 }
@@ -72,4 +72,9 @@ function Clock({
       </span>
     </>
   );
+}
+
+/** A bare number or letter needs the word before it. */
+function named(label: string): string {
+  return label.includes(' ') ? label : `position ${label}`;
 }

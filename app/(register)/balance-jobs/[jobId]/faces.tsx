@@ -4,6 +4,7 @@ import { RotorFace } from '@/components/rotor-face/rotor-face';
 import type { FaceWeight } from '@/components/rotor-face/face-types';
 import { Panel } from '@/components/ui/panel';
 import type { BalanceJobDto, PlaneDto } from '@/lib/schemas/balance-job';
+import { stillToHang } from './still-to-hang';
 
 /** The rotor faces of the job's planes: what hangs there, what is proposed, how the reading walked. */
 export function Faces({ job }: { job: BalanceJobDto }) {
@@ -35,8 +36,16 @@ function weightsOf(job: BalanceJobDto, plane: PlaneDto): FaceWeight[] {
       label: weight.positionLabel ?? weight.purpose,
       state: weight.purpose === 'trial' && weight.stays !== true ? 'trial' : 'on',
     }));
+  const planned = stillToHang(job, plane.id).map((weight): FaceWeight => ({
+    id: `plan-${weight.positionId}`,
+    massG: weight.massG,
+    angleDeg: plane.positions.find(({ id }) => id === weight.positionId)?.angleDeg ?? 0,
+    label: weight.label,
+    state: 'proposed',
+  }));
+  const isPlanned = job.placements.some(({ planeId }) => planeId === plane.id);
   const proposed = proposal(job)
-    .filter((answer) => answer.planeId === plane.id)
+    .filter((answer) => answer.planeId === plane.id && !isPlanned)
     .map((answer): FaceWeight => ({
       id: `answer-${answer.planeId}`,
       massG: answer.massG,
@@ -44,7 +53,7 @@ function weightsOf(job: BalanceJobDto, plane: PlaneDto): FaceWeight[] {
       label: 'answer',
       state: 'proposed',
     }));
-  return [...hung, ...proposed];
+  return [...hung, ...planned, ...proposed];
 }
 
 function proposal(job: BalanceJobDto) {

@@ -8,7 +8,6 @@ import {
   formatDegrees,
   formatMass,
   formatNumber,
-  formatPlural,
   formatQuantity,
   formatRotorAngle,
 } from '@/lib/format';
@@ -23,6 +22,7 @@ import { RunForm } from './run-form';
 import { SettleForm } from './settle-form';
 import { SignForm } from './sign-form';
 import { SlipsPanel } from './slips-panel';
+import { stillToHang } from './still-to-hang';
 import { WeightForm } from './weight-form';
 
 /** The one thing to do now. Everything else on the sheet is what was done. */
@@ -144,21 +144,13 @@ function FitCorrection({ job, planeIds }: { job: BalanceJobDto; planeIds: readon
 
 /** A further weight for the same answer: in sight while the plan of the positions has more to hang. */
 function AnotherWeight({ job, plane }: { job: BalanceJobDto; plane: PlaneDto }) {
-  const since = job.accepted.at(-1)?.acceptedAt ?? '';
-  const hung = job.weights.filter(
-    ({ planeId, purpose, endedAt, fittedAt }) =>
-      planeId === plane.id && purpose === 'correction' && endedAt === null && fittedAt >= since,
-  );
-  const plan = job.placements
-    .find(({ planeId }) => planeId === plane.id)
-    ?.choices.find(({ proposed }) => proposed);
-  const toHang = (plan?.weights.length ?? 0) - hung.length;
+  const toHang = stillToHang(job, plane.id);
   return (
     <Panel>
-      <details open={toHang > 0}>
+      <details open={toHang.length > 0}>
         <summary className="target cursor-pointer font-semibold">
-          {toHang > 0
-            ? `Next: fit card, plane ${plane.name}, ${formatPlural(toHang, 'weight')} to go`
+          {toHang.length > 0
+            ? `Next: fit card, plane ${plane.name}: ${hangWords(toHang)}`
             : `Another weight in plane ${plane.name}…`}
         </summary>
         <div className="mt-4">
@@ -167,6 +159,10 @@ function AnotherWeight({ job, plane }: { job: BalanceJobDto; plane: PlaneDto }) 
       </details>
     </Panel>
   );
+}
+
+function hangWords(planned: ReturnType<typeof stillToHang>): string {
+  return planned.map(({ label, massG }) => `${formatMass(massG)} on ${label}`).join(', ');
 }
 
 function Decide({ job }: { job: BalanceJobDto }) {
