@@ -37,6 +37,8 @@ export const BalanceJob = defineEntity({
     angleSense: p.enum(['against', 'with'] as const),
     targets: p.json<JobTargets>(),
     startsAllowed: p.integer().nullable(),
+    /** Whether the rotor was cleaned and looked at before; null for jobs from before it was asked. */
+    cleaned: p.enum(['yes', 'no', 'cannot be'] as const).nullable(),
     state: p.enum([
       'opened',
       'base taken',

@@ -1,6 +1,6 @@
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { formatDegrees, formatNumber, formatQuantity } from '@/lib/format';
-import type { BookCoefficientDto } from '@/lib/schemas/balance-job';
+import type { BookCoefficientDto } from '@/lib/schemas/balance-job-parts';
 
 type Line = BookCoefficientDto & { count?: number; spreadPct?: number | null };
 type CoefficientLinesProps = { lines: readonly Line[]; unit: string };

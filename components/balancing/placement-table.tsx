@@ -1,7 +1,7 @@
 import { Notice } from '@/components/ui/notice';
 import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { formatMass, formatNumber, formatQuantity, type DecimalMark } from '@/lib/format';
-import type { PlacementDto } from '@/lib/schemas/balance-job';
+import type { PlacementDto } from '@/lib/schemas/balance-job-parts';
 
 type PlacementTableProps = { placement: PlacementDto; unit: string; decimalMark: DecimalMark };
 

@@ -1,6 +1,6 @@
 import { Notice } from '@/components/ui/notice';
 import { formatDegrees, formatNumber } from '@/lib/format';
-import type { TrialComparisonDto } from '@/lib/schemas/balance-job';
+import type { TrialComparisonDto } from '@/lib/schemas/balance-job-parts';
 
 /** What the trial runs say beside the coefficient book, before any more weight goes on. */
 export function TrialsAgainstBook({ trials }: { trials: readonly TrialComparisonDto[] }) {

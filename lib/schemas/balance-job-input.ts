@@ -41,6 +41,17 @@ export const openBalanceJobInput = z
     targetZone: z.enum(['A', 'B', '']).default(''),
     gradeTarget: tick,
     startsAllowed: optionalNumber({ what: 'the number of starts allowed', min: 1, max: 50 }),
+    cleaned: choice(
+      ['yes', 'no', 'cannot be'],
+      'Say whether the rotor was cleaned and looked at: deposits are unbalance too.',
+    ),
+    nothingLoose: mustTick(
+      'Check bolts, feet and fixings. Loose parts are found before weights are hung.',
+    ),
+    readingSteady: mustTick(
+      'See that mark, tacho and sensors are fixed and the tacho counts steadily.',
+    ),
+    stateAgreed: mustTick('Agree speed, load and damper for every run with the area owner.'),
     setupConfirmed: mustTick(
       'Look at the mark, the tacho and the sensors and confirm the set-up, or record a new set-up first.',
     ),
@@ -127,6 +138,8 @@ export const fitWeightInput = z.object({
   angleSense: z.enum(['against', 'with', '']).default(''),
   arcMm: optionalNumber({ what: 'the arc along the rim', unit: 'mm', min: 0 }),
   fixing: text('how the weight is fixed', 200),
+  /** Engineer who agrees to a trial weight while the base is in zone D. */
+  consent: z.string().trim().max(120).default(''),
   standingStill: mustTick(
     'Hands on the rotor only when it stands still and every energy source is locked out. Tick it when it is so.',
   ),

@@ -1,3 +1,10 @@
+import type {
+  BookOfferDto,
+  ReuseDto,
+  PlacementDto,
+  TrialComparisonDto,
+  LastJobDto,
+} from './balance-job-parts';
 import type { Step } from '@/lib/domain/balance-job/next-step';
 import type { RepeatTest } from '@/lib/domain/balancing/repeat-test';
 import type { SlipTest } from '@/lib/domain/balancing/slip-tests';
@@ -228,65 +235,6 @@ export type TrialProposalDto = {
   loweringDeg: number | null;
 };
 
-/** An influence coefficient of the book, size per kg·mm and turn. */
-export type BookCoefficientDto = {
-  planeName: string;
-  pointLabel: string;
-  sizePerKgMm: number;
-  deg: number;
-};
-
-/** What the book offers instead of trial runs, or in words why it offers nothing. */
-export type BookOfferDto =
-  | { failure: string; empty: boolean }
-  | {
-      failure: null;
-      grade: 'good' | 'with care';
-      speedRpm: number;
-      lines: (BookCoefficientDto & { count: number; spreadPct: number | null })[];
-    };
-
-/** Coefficients of the book that this job uses, as they were when a person took them. */
-export type ReuseDto = {
-  grade: 'good' | 'with care';
-  speedRpm: number;
-  at: string;
-  person: string;
-  confirmed: string[];
-  reason: string | null;
-  lines: BookCoefficientDto[];
-};
-
-/** The answer put on the fixed positions of one plane: the best choice for each number of positions. */
-export type PlacementDto = {
-  planeId: number;
-  planeName: string;
-  pieceG: number;
-  /** So much may remain, g·mm. */
-  targetGmm: number;
-  failure: string | null;
-  choices: {
-    weights: { positionId: number; label: string; massG: number }[];
-    totalG: number;
-    residualGmm: number;
-    meetsTarget: boolean;
-    /** No other combination of as many positions leaves less. */
-    proven: boolean;
-    proposed: boolean;
-    expected: { label: string; amplitude: number }[];
-  }[];
-};
-
-/** A trial run against what the book knows of the same plane and point. */
-export type TrialComparisonDto = {
-  planeName: string;
-  pointLabel: string;
-  ratio: number;
-  turnDeg: number;
-  agrees: boolean;
-  sensesSuspect: boolean;
-};
-
 export type BalanceJobDto = {
   id: number;
   number: number;
@@ -298,6 +246,14 @@ export type BalanceJobDto = {
   reason: string;
   targets: { oneX: number | null; zone: 'A' | 'B' | null; grade: boolean };
   startsAllowed: number | null;
+  /** Starts that the job needs at least: base, trials, check, trim. */
+  startsPlanned: number;
+  cleaned: 'yes' | 'no' | 'cannot be' | null;
+  /** Machines of the same area whose speed is so near that the readings can beat. */
+  neighbours: { tag: string; speedRpm: number }[];
+  lastJob: LastJobDto | null;
+  /** The base is in zone D: a trial weight needs the consent of an engineer. */
+  needsConsent: boolean;
   openedAt: string;
   openedBy: string;
   closedAt: string | null;

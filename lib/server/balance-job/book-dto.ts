@@ -6,12 +6,12 @@ import type { ReusableBook } from '@/lib/domain/balancing/reusable-coefficients'
 import { trialsAgainstBook } from '@/lib/domain/balancing/trials-against-book';
 import { angleDeg, size } from '@/lib/domain/complex';
 import type { Result } from '@/lib/domain/result';
+import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import type {
-  BalanceJobDto,
   BookCoefficientDto,
   BookOfferDto,
   TrialComparisonDto,
-} from '@/lib/schemas/balance-job';
+} from '@/lib/schemas/balance-job-parts';
 import { coefficientOffer } from './coefficient-offer';
 import { jobInput } from './job-input';
 import type { LoadedJob } from './load-job';

@@ -7,7 +7,8 @@ import { permissibleUnbalance } from '@/lib/domain/balancing/permissible-unbalan
 import { predictAdded } from '@/lib/domain/balancing/predict-run';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
 import { fromPolar, type Complex } from '@/lib/domain/complex';
-import type { PlacementDto, PlaneDto } from '@/lib/schemas/balance-job';
+import type { PlaneDto } from '@/lib/schemas/balance-job';
+import type { PlacementDto } from '@/lib/schemas/balance-job-parts';
 import { jobInput } from './job-input';
 import type { LoadedJob } from './load-job';
 

@@ -1,9 +1,13 @@
 import 'server-only';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import type { z } from 'zod';
 import type { Plane } from '@/entities/rotor';
 import { Weight } from '@/entities/weight';
+import { allows, type Role } from '@/lib/domain/access/permissions';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { fitWeightInput } from '@/lib/schemas/balance-job-input';
+import { baseInZoneD } from '../balance-job/before-first-run';
+import { limitsOf } from '../balance-job/limits-of';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
 import { recordCautions } from '../balance-job/record-cautions';
 import { resolvePlace } from '../balance-job/resolve-place';
@@ -23,6 +27,8 @@ export const fitWeight = command(
     const loaded = await loadJob(em, job);
     const refusal = outOfOrder(loaded, input);
     if (refusal) return refusal;
+    const unagreed = await needsConsent(em, loaded, input, actor.role);
+    if (unagreed) return unagreed;
     const place = await resolvePlace(em, input);
     if (!place.ok) return place;
     const { plane, position, angleDeg } = place.value;
@@ -61,6 +67,22 @@ export const fitWeight = command(
     return ok({ weightId: weight.id, angleDeg });
   },
 );
+
+/** Zone D: a trial weight can raise it further, so an engineer decides (lower speed, or the book). */
+async function needsConsent(
+  em: EntityManager,
+  loaded: LoadedJob,
+  { purpose, consent }: Input,
+  role: Role,
+): Promise<Result<never> | null> {
+  if (purpose !== 'trial' || consent !== '' || allows(role, 'balanceJob:override')) return null;
+  if (!baseInZoneD(loaded, await limitsOf(em, loaded.job.machine.id))) return null;
+  return fail(
+    'zone-d',
+    'The base is in zone D, and a trial weight can raise it. Name the engineer who agrees; a lower speed or the coefficient book may do without it.',
+    'consent',
+  );
+}
 
 function answerFor({ answers }: LoadedJob, { purpose }: Input): number | null {
   return purpose === 'correction' ? (answers.at(-1)?.number ?? null) : null;

@@ -38,6 +38,7 @@ export const openBalanceJob = command(
         grade: input.gradeTarget,
       },
       startsAllowed: input.startsAllowed,
+      cleaned: input.cleaned,
       state: 'opened',
       openedBy: actor.personId,
       openedAt: now,

@@ -1,7 +1,6 @@
 import 'server-only';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { SignOff } from '@/entities/caution';
-import { LimitUse } from '@/entities/limit-set';
 import { OneXVector } from '@/entities/measured-record';
 import { Person } from '@/entities/person';
 import type { JobInput } from '@/lib/domain/balancing/job-input';
@@ -11,9 +10,11 @@ import type { BalanceJobDto, RunDto } from '@/lib/schemas/balance-job';
 import { answerDto } from '../balance-job/answer-dto';
 import { asFitted } from '../balance-job/as-fitted';
 import { baseRepeats } from '../balance-job/base-repeats';
+import { beforeFirstRun } from '../balance-job/before-first-run';
 import { bookPart } from '../balance-job/book-dto';
 import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
+import { limitsOf } from '../balance-job/limits-of';
 import { loadJob, type LoadedJob, type LoadedRun } from '../balance-job/load-job';
 import { placements } from '../balance-job/placements';
 import { planeDtos, pointDto, setupDto, weightDto, weightsOnRotor } from '../balance-job/places';
@@ -35,11 +36,13 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
   const names = await namesOf(em, loaded);
   const rotorWeights = await weightsOnRotor(em, job.rotor.id);
   const planes = await planeDtos(em, loaded.planes);
+  const limits = await limitsOf(em, job.machine.id);
   const check = checkVerdict(loaded);
   const { offered, ...book } = await bookPart(em, loaded);
   return {
     ...headOf(loaded, names),
-    limits: await limitsOf(em, job.machine.id),
+    limits,
+    ...(await beforeFirstRun(em, loaded, limits)),
     planes,
     points: points.map((point) => pointDto(point)),
     runs: loaded.runs.map((run) => runDto(run, names, loaded.runs)),
@@ -89,6 +92,7 @@ function headOf({ job }: LoadedJob, names: Names) {
     reason: job.reason,
     targets: job.targets,
     startsAllowed: job.startsAllowed ?? null,
+    cleaned: job.cleaned ?? null,
     openedAt: job.openedAt.toISOString(),
     openedBy: names.get(job.openedBy.id) ?? '',
     closedAt: job.closedAt?.toISOString() ?? null,
@@ -177,17 +181,6 @@ function acceptedOf({ answers }: LoadedJob, names: Names): BalanceJobDto['accept
       acceptedBy: names.get(answer.acceptedBy.id) ?? '',
     };
   });
-}
-
-async function limitsOf(em: EntityManager, machineId: number): Promise<BalanceJobDto['limits']> {
-  const use = await em.findOne(
-    LimitUse,
-    { machine: machineId, toAt: null },
-    { populate: ['limitSet'] },
-  );
-  if (!use) return null;
-  const { title, edition, bAb, bBc, bCd } = use.limitSet.$;
-  return { title, edition, bAb, bBc, bCd };
 }
 
 const CHOICES_PER_POINT = 5;

@@ -5,6 +5,7 @@ import { TextAreaField } from '@/components/ui/text-area-field';
 import { formatLag, formatPlural, formatQuantity } from '@/lib/format';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import { acceptBaseAction } from './actions';
+import { BeforeFirstRun } from './before-first-run';
 import { RunForm } from './run-form';
 import { StepForm } from './step-form';
 
@@ -13,6 +14,7 @@ export function BaseStep({ job }: { job: BalanceJobDto }) {
   const taken = job.runs.filter(({ purpose, state }) => purpose === 'base' && state === 'kept');
   return (
     <>
+      <BeforeFirstRun job={job} />
       <Panel title={`Next: base run ${taken.length + 1}`} note="three that agree are wanted">
         <RunForm job={job} purpose="base" button="Record base run" />
       </Panel>

@@ -1,4 +1,5 @@
-import type { BalanceJobDto, PlacementDto } from '@/lib/schemas/balance-job';
+import type { BalanceJobDto } from '@/lib/schemas/balance-job';
+import type { PlacementDto } from '@/lib/schemas/balance-job-parts';
 
 type Planned = PlacementDto['choices'][number]['weights'][number];
 

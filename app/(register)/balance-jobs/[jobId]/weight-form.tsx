@@ -67,6 +67,13 @@ export function WeightForm({ job, plane, purpose, proposedG }: WeightFormProps) 
             ]}
           />
           <PlaceFields plane={plane} state={state} />
+          {purpose === 'trial' && job.needsConsent && (
+            <Field
+              name="consent"
+              label="The base is in zone D: engineer who agrees to a trial weight (name)"
+              state={state}
+            />
+          )}
           <Field name="fixing" label="Fixed by" state={state} hint="bolt, clamp, weld, rivet" />
         </>
       )}

@@ -33,7 +33,7 @@ export function OpenJobForm({ dto }: { dto: NewJobDto }) {
           <CheckField
             name="setupConfirmed"
             state={state}
-            label={`I looked: mark, tacho and sensors are as set-up ${dto.setup.number} says, and the weights on the rotor are those listed.`}
+            label={`I looked: mark, tacho and sensors are as set-up ${dto.setup.number} says, and the weights on the rotor are those listed, or are put right in the job before its first run.`}
           />
         </div>
       </Panel>
@@ -43,6 +43,9 @@ export function OpenJobForm({ dto }: { dto: NewJobDto }) {
           <PlaceChoices dto={dto} state={state} />
           <TextAreaField name="reason" label="Why is it balanced?" state={state} rows={2} />
         </div>
+      </Panel>
+      <Panel title="Before the first run">
+        <PreRun state={state} />
       </Panel>
       <Panel title="How you read and count">
         <Conventions state={state} />
@@ -60,6 +63,40 @@ export function OpenJobForm({ dto }: { dto: NewJobDto }) {
         <SubmitButton>Open balance job</SubmitButton>
       </div>
     </form>
+  );
+}
+
+/** What is seen to before anything is measured. */
+function PreRun({ state }: { state: ActionState }) {
+  return (
+    <div className="flex flex-col gap-3">
+      <RadioField
+        name="cleaned"
+        label="Was the rotor cleaned and looked at?"
+        hint="Deposits, worn blades and lost weights are unbalance too."
+        state={state}
+        choices={[
+          { value: 'yes', label: 'yes' },
+          { value: 'no', label: 'no' },
+          { value: 'cannot be', label: 'it cannot be' },
+        ]}
+      />
+      <CheckField
+        name="nothingLoose"
+        state={state}
+        label="Bolts, feet and fixings were checked: nothing is loose."
+      />
+      <CheckField
+        name="readingSteady"
+        state={state}
+        label="Mark, tacho and sensors are fixed, and the tacho counts steadily."
+      />
+      <CheckField
+        name="stateAgreed"
+        state={state}
+        label="Speed, load and damper are agreed with the area owner, the same for every run."
+      />
+    </div>
   );
 }
 
