@@ -55,6 +55,7 @@ it('names neighbours whose speed lies within 3 %, and no others', async () => {
     em.assign(other, {
       area: own.area,
       nominalSpeedRpm,
+      speedMaxRpm: 1100,
       tag: `${tag}-${made}`,
       tagKey: `${tag}-${made}`.toLowerCase(),
     });
