@@ -1,4 +1,4 @@
-import type { SlipHypothesis } from '../balancing/slip-hypotheses';
+import { TRIAL_STAYED, type SlipHypothesis } from '../balancing/slip-hypotheses';
 import { normaliseDeg } from '../units';
 
 /** The slips that a person can confirm, after which the records are put right. */
@@ -10,6 +10,7 @@ export const SLIPS = [
   'planes swapped',
   'channels swapped',
   'trial left on',
+  ...TRIAL_STAYED,
   'earlier weight gone',
   'mass ten times too small',
   'mass ten times too large',
@@ -48,6 +49,8 @@ export type SlipRepair = {
   readonly vectors: 'as entered' | 'mirrored' | 'points swapped';
   /** Trial weights recorded as taken off were on in the check run. */
   readonly trialsOn: boolean;
+  /** Of those trial weights, by the order of their runs, the one that was on in every run after its own. */
+  readonly stayedTrial: number | null;
   /** The job's earlier weights were gone in the check run. */
   readonly earlierGone: boolean;
 };
@@ -57,6 +60,7 @@ const NOTHING: SlipRepair = {
   weight: (facts) => facts,
   vectors: 'as entered',
   trialsOn: false,
+  stayedTrial: null,
   earlierGone: false,
 };
 
@@ -91,6 +95,9 @@ export function slipRepair(slip: Slip, { planeIds, pitchDeg }: SlipFacts): SlipR
       fitted((facts) => ({ ...facts, planeId: otherOf(planeIds, facts.planeId) })),
     'channels swapped': () => ({ ...NOTHING, vectors: 'points swapped' }),
     'trial left on': () => ({ ...NOTHING, trialsOn: true }),
+    'first trial stayed on': () => ({ ...NOTHING, stayedTrial: 0 }),
+    'second trial stayed on': () => ({ ...NOTHING, stayedTrial: 1 }),
+    'third trial stayed on': () => ({ ...NOTHING, stayedTrial: 2 }),
     'earlier weight gone': () => ({ ...NOTHING, earlierGone: true }),
     'mass ten times too small': () => massTimes(1 / 10),
     'mass ten times too large': () => massTimes(10),

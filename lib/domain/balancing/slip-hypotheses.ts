@@ -14,6 +14,13 @@ export type SlipInput = {
   readonly otherRadiusMm?: number | null;
 };
 
+/** A trial of the job, in order of the runs, that has stayed on since its own run. */
+export const TRIAL_STAYED = [
+  'first trial stayed on',
+  'second trial stayed on',
+  'third trial stayed on',
+] as const;
+
 /** A job up to a check run, the check run, and the weights fitted for it. */
 export type SlipStory = {
   readonly job: JobInput;
@@ -33,6 +40,7 @@ export type SlipHypothesis = {
     | 'planes swapped'
     | 'channels swapped'
     | 'trial left on'
+    | (typeof TRIAL_STAYED)[number]
     | 'earlier weight gone'
     | 'mass ten times too small'
     | 'mass ten times too large'
@@ -141,17 +149,52 @@ function weightHypotheses(job: JobInput, input: SlipInput): SlipHypothesis[] {
     .filter((w) => !on.has(weightsKey([w])));
   const trials = [...new Map(takenOff.map((w) => [weightsKey([w]), w])).values()];
   const besides = (check?.weights.length ?? 0) > input.fitted.length;
-  const left: SlipHypothesis = {
-    slip: 'trial left on',
-    words: 'A trial weight that was to come off is still on the rotor.',
-    alter: (story) => ({ ...story, fitted: [...story.fitted, ...trials] }),
-  };
   const gone: SlipHypothesis = {
     slip: 'earlier weight gone',
     words: 'The weights fitted earlier in this job are no longer on the rotor.',
     alter: (story) => ({ ...story, fitted: [...story.fitted, ...story.check.weights.map(undone)] }),
   };
-  return [...(trials.length > 0 ? [left] : []), ...(besides ? [gone] : [])];
+  return [...trialsLeftOn(job, trials), ...(besides ? [gone] : [])];
+}
+
+/** All trials at the end, and each trial by itself from its run on: then later trial runs had it too. */
+function trialsLeftOn(
+  { planes, runs }: JobInput,
+  trials: readonly FittedWeight[],
+): SlipHypothesis[] {
+  if (trials.length === 0) return [];
+  const all: SlipHypothesis = {
+    slip: 'trial left on',
+    words:
+      trials.length > 1
+        ? 'The trial weights that were to come off are all on the rotor now.'
+        : 'A trial weight that was to come off is still on the rotor.',
+    alter: (story) => ({ ...story, fitted: [...story.fitted, ...trials] }),
+  };
+  const stayed = trials.flatMap((trial, at): SlipHypothesis[] => {
+    const slip = TRIAL_STAYED[at];
+    const own = runs.findLastIndex((run) => carries(run, trial));
+    if (!slip || (trials.length === 1 && own === runs.length - 1)) return [];
+    const after = new Set(runs.slice(own + 1).map(({ id }) => id));
+    const withTrial = (run: JobRun): JobRun =>
+      after.has(run.id) ? { ...run, weights: [...run.weights, trial] } : run;
+    return [
+      {
+        slip,
+        words: `The trial weight of plane ${planes.find(({ id }) => id === trial.planeId)?.name ?? ''} has stayed on the rotor since its run.`,
+        alter: (story) => ({
+          ...story,
+          job: { ...story.job, runs: story.job.runs.map(withTrial) },
+          fitted: [...story.fitted, trial],
+        }),
+      },
+    ];
+  });
+  return [all, ...stayed];
+}
+
+function carries({ weights }: JobRun, weight: FittedWeight): boolean {
+  return weights.some((other) => weightsKey([other]) === weightsKey([weight]));
 }
 
 function placeHypotheses({ pitchDeg, otherRadiusMm }: SlipInput): SlipHypothesis[] {

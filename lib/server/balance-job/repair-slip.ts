@@ -6,6 +6,7 @@ import { Weight } from '@/entities/weight';
 import { otherOf, type SlipRepair } from '@/lib/domain/balance-job/slip-repair';
 import { lagDeg } from '@/lib/domain/units';
 import type { LoadedJob, LoadedRun, LoadedWeight } from './load-job';
+import { runsWithTrials, trialsStillOn } from './trials-still-on';
 
 type By = { em: EntityManager; personId: number; now: Date };
 type Repaired = ReadonlyMap<number, Weight | null>;
@@ -32,6 +33,7 @@ export async function repairWeights(
     repair: of.repair,
     fitted: fittedIds(loaded, of.check),
     inCheck: new Set(of.check.run.weightsState.map(({ weightId }) => weightId)),
+    trialsOn: trialsStillOn(loaded, of),
   };
   const repaired = new Map<number, Weight | null>();
   for (const weight of loaded.weights) {
@@ -55,17 +57,20 @@ type Fate = {
   ending: 'recorded wrongly' | 'found missing';
 };
 
+type Seen = {
+  repair: SlipRepair;
+  fitted: Set<number>;
+  inCheck: Set<number>;
+  trialsOn: Set<number>;
+};
+
 /** What the slip says of a weight; null where its entry stands. */
-function fateOf(
-  weight: LoadedWeight,
-  { repair, fitted, inCheck }: { repair: SlipRepair; fitted: Set<number>; inCheck: Set<number> },
-): Fate | null {
+function fateOf(weight: LoadedWeight, { repair, fitted, inCheck, trialsOn }: Seen): Fate | null {
   const facts = factsOf(weight);
   const fate = { stillOn: false, ending: 'recorded wrongly' as const };
   if (repair.weights === 'all' || (repair.weights === 'fitted' && fitted.has(weight.id)))
     return { ...fate, facts: repair.weight(facts) };
-  if (repair.trialsOn && weight.purpose === 'trial' && !inCheck.has(weight.id))
-    return { ...fate, facts, stillOn: true };
+  if (trialsOn.has(weight.id)) return { ...fate, facts, stillOn: true };
   if (repair.earlierGone && inCheck.has(weight.id) && !fitted.has(weight.id))
     return { ...fate, facts: null, ending: 'found missing' };
   return null;
@@ -79,9 +84,10 @@ export function repairRuns(
 ): number[] {
   let number = loaded.runs.at(-1)?.run.number ?? 0;
   const replaced: number[] = [];
+  const touched = runsWithTrials(loaded, of);
   for (const one of loaded.runs.filter(({ run }) => run.state === 'kept')) {
     const isCheck = one.run.id === of.check.run.id;
-    const weightsState = stateAnew(one.run, isCheck, of);
+    const weightsState = stateAnew(one.run, touched.has(one.run.id), of);
     const turned = isTurned(of.repair, isCheck);
     if (!weightsState && !turned) continue;
     number += 1;
@@ -114,19 +120,20 @@ function factsOfRun({ job, purpose, takenAt, speedRpm, setup, stateReason }: Run
 
 function stateAnew(
   run: Run,
-  isCheck: boolean,
+  isTouched: boolean,
   { repair, repaired }: { repair: SlipRepair; repaired: Repaired },
 ): WeightOnRotor[] | null {
-  // A trial that was on all the while, and a weight that was gone, change the check run only.
-  const onlyCheck = repair.trialsOn || repair.earlierGone;
-  if (onlyCheck && !isCheck) return null;
-  if (!onlyCheck && !run.weightsState.some(({ weightId }) => repaired.has(weightId))) return null;
+  // Trials put on again, and a weight that was gone, change the check run; one that stayed on, all since its run.
+  const trialsOn = repair.trialsOn || repair.stayedTrial !== null;
+  const onlySome = trialsOn || repair.earlierGone;
+  if (onlySome && !isTouched) return null;
+  if (!onlySome && !run.weightsState.some(({ weightId }) => repaired.has(weightId))) return null;
   const known = run.weightsState.flatMap((weight) => {
     const stands = repaired.get(weight.weightId);
     if (stands === undefined) return weight;
     return stands ? onRotor(stands) : [];
   });
-  const trials = repair.trialsOn ? [...repaired.values()].filter((weight) => weight !== null) : [];
+  const trials = trialsOn ? [...repaired.values()].filter((weight) => weight !== null) : [];
   return [...known, ...trials.map(onRotor)];
 }
 

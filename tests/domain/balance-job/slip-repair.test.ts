@@ -24,6 +24,10 @@ describe('slipRepair', () => {
     expect(slipRepair('lead read as lag', known).vectors).toBe('mirrored');
     expect(slipRepair('channels swapped', known).vectors).toBe('points swapped');
     expect(slipRepair('trial left on', known).trialsOn).toBe(true);
+    expect(slipRepair('trial left on', known).stayedTrial).toBeNull();
+    expect(slipRepair('first trial stayed on', known).stayedTrial).toBe(0);
+    expect(slipRepair('second trial stayed on', known).stayedTrial).toBe(1);
+    expect(slipRepair('third trial stayed on', known).stayedTrial).toBe(2);
     expect(slipRepair('earlier weight gone', known).earlierGone).toBe(true);
   });
 

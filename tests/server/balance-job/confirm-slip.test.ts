@@ -137,6 +137,8 @@ type Happened = {
   hung: (fitted: Hung[], trials: Hung[]) => Hung[];
   /** Share of the answer that is fitted, so that the slip shows. */
   share?: number;
+  /** The trial that was not taken off, whatever was said. */
+  stayed?: number;
   readings?: (readings: { amp: number; deg: number }[]) => { amp: number; deg: number }[];
 };
 
@@ -154,6 +156,14 @@ const HAPPENED: Partial<Record<Slip, Happened>> = {
     readings: (all) => all.toReversed(),
   },
   'trial left on': { hung: (fitted, trials) => [...fitted, ...trials] },
+  'first trial stayed on': {
+    hung: (fitted, [first]) => (first ? [...fitted, first] : fitted),
+    stayed: 0,
+  },
+  'second trial stayed on': {
+    hung: (fitted, [, second]) => (second ? [...fitted, second] : fitted),
+    stayed: 1,
+  },
   'mass ten times too small': { hung: (f) => f.map((w) => ({ ...w, g: w.g / 10 })) },
   'mass ten times too large': { hung: (f) => f.map((w) => ({ ...w, g: w.g * 10 })) },
   'one position further': { hung: (fitted) => turn(fitted, 30) },
@@ -182,9 +192,10 @@ describe('every other slip at the correction, once confirmed', () => {
       { plane: 0, g: 20, deg: 0 },
       { plane: 1, g: 20, deg: 0 },
     ];
-    for (const trial of trials) {
+    for (const [at, trial] of trials.entries()) {
       await fit('trial', trial);
-      valueOf(await job.run('trial', readingsWith([trial])));
+      const left = trials.filter((_, before) => before < at && before === happened.stayed);
+      valueOf(await job.run('trial', readingsWith([...left, trial])));
       await job.settle('taken off');
     }
     const answer = await job.accept();
