@@ -1,3 +1,4 @@
+import { centrifugalForceN, weightN } from './centrifugal-force';
 import { runName, type JobInput } from './job-input';
 import type { JobNotice, JobSolution } from './job-solution';
 
@@ -6,6 +7,8 @@ type Known = Omit<JobSolution, 'notices'>;
 const MISFIT_PER_SCATTER = 3;
 const DIFFERENCE_PCT = 10;
 const LARGE_CHANGE_PCT = 200;
+/** A trial of more than this share of the static load is twice what practice allows: a decimal point, often. */
+const HEAVY_TRIAL_PCT = 20;
 const FIGHTING = 0.3;
 const RISE = 1.2;
 
@@ -80,8 +83,24 @@ function trialNotices(input: JobInput, { trials }: Known): JobNotice[] {
           },
         ]
       : [];
-    return [...wide, ...weak, ...large];
+    return [...heavyTrial(input, runId), ...wide, ...weak, ...large];
   });
+}
+
+/** Nothing else tells a mass typed ten times too large before the answer, as much too large, hangs. */
+function heavyTrial({ runs, rotor, planes }: JobInput, runId: number): JobNotice[] {
+  const run = runs.find(({ id }) => id === runId);
+  if (!run || !rotor?.massKg) return [];
+  const unbalance = Math.max(0, ...run.weights.map((w) => w.massG * w.radiusMm));
+  const loadN = weightN(rotor.massKg) / Math.min(2, planes.length);
+  const pct = (100 * centrifugalForceN(unbalance, run.speedRpm)) / loadN;
+  if (pct <= HEAVY_TRIAL_PCT) return [];
+  return [
+    {
+      code: 'trial-heavy',
+      message: `The trial weight entered for ${runName(run)} pulls with ${pct.toFixed(0)} % of the static load, and 10 % is usual. Weigh it again and look at the decimal point before any weight of this answer is fitted.`,
+    },
+  ];
 }
 
 function answerNotices(input: JobInput, solution: Known): JobNotice[] {

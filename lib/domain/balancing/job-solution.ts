@@ -47,6 +47,7 @@ export type JobNotice = {
     | 'trial-wide'
     | 'trial-weak'
     | 'trial-large'
+    | 'trial-heavy'
     | 'condition'
     | 'opposing-weights'
     | 'plane-limit'

@@ -48,6 +48,48 @@ describe('notices beside an answer', () => {
     expect(words).toContain('run 3');
   });
 
+  // 20 g at 300 mm pull with 144.1 N at 1480 r/min (m·r·Ω²): 20.0 % of the weight of 73.5 kg.
+  it.each([
+    [73.6, false],
+    [73.3, true],
+  ])('ask to weigh a trial again that pulls with more than 20 %% of %s kg: %s', (massKg, said) => {
+    const words = wordsOf(jobWith(quiet, { rotor: { massKg } }), 'trial-heavy');
+    expect(words !== undefined).toBe(said);
+    if (said) expect(words).toContain('entered for run 3 pulls with 20 %');
+  });
+
+  it('count half the rotor for each of two planes, and nothing where no mass is known', () => {
+    const runs = [
+      run(1, 'base', [
+        { amp: 4, deg: 20 },
+        { amp: 3, deg: 200 },
+      ]),
+      run(
+        2,
+        'trial',
+        [
+          { amp: 3, deg: 60 },
+          { amp: 3.2, deg: 190 },
+        ],
+        [trial],
+      ),
+      run(
+        3,
+        'trial',
+        [
+          { amp: 4.2, deg: 10 },
+          { amp: 1, deg: 120 },
+        ],
+        [weight(2, 5, 300, 0)],
+      ),
+    ];
+    const two = (massKg: number) =>
+      codes(job([300, 300], 2, runs, { weightsNow: [], rotor: { massKg } }));
+    expect(two(146)).toContain('trial-heavy');
+    expect(two(148)).not.toContain('trial-heavy');
+    expect(codes(jobWith(quiet))).not.toContain('trial-heavy');
+  });
+
   // The trade's rule: 30 % in size or 30° in phase; at the limit it is met.
   it.each([
     [{ amp: 4 * 1.29, deg: 20 }, true],
