@@ -156,6 +156,48 @@ describe('solveJob, whatever the rotor', () => {
     );
   });
 
+  it('does not care for the numbers that planes and points have', () => {
+    const ids = fc.uniqueArray(fc.integer({ min: 1, max: 10_000 }), { minLength: 2, maxLength: 2 });
+    fc.assert(
+      fc.property(rotors, ids, ids, ({ rotor, trials }, planeIds, pointIds) => {
+        const input = jobOfRotor(rotor, trials);
+        const plane = (id: number) => planeIds[id - 1]!;
+        const point = (id: number) => pointIds[id - 1]!;
+        const renumbered = withRuns(
+          {
+            ...input,
+            planes: input.planes.map((p) => ({ ...p, id: plane(p.id) })),
+            points: input.points.map((p) => ({ ...p, id: point(p.id) })),
+          },
+          (run) => ({
+            ...run,
+            vectors: run.vectors.map((v) => ({ ...v, pointId: point(v.pointId) })),
+            weights: run.weights.map((w) => ({ ...w, planeId: plane(w.planeId) })),
+          }),
+        );
+        const answer = answerTo(renumbered);
+        expect(answer.add.map(({ planeId }) => planeId)).toEqual(planeIds.slice(0, trials.length));
+        expectSame(unbalances(answer), unbalances(answerTo(input)));
+      }),
+    );
+  });
+
+  it('learns the same whether the first trial is taken off or left on while the second runs', () => {
+    fc.assert(
+      fc.property(twoPlaneRotors(), ({ rotor, trials }) => {
+        const removed = jobOfRotor(rotor, trials);
+        const leftOn = {
+          ...removed,
+          runs: [...removed.runs.slice(0, 2), runOfRotor(rotor, 3, 'trial', trials)],
+        };
+        expectSame(unbalances(answerTo(leftOn)), unbalances(answerTo(removed)), 1e-8);
+        const total = (answer: Answer) => unbalances({ add: answer.total });
+        const staying = answerTo({ ...leftOn, weightsNow: trials });
+        expectSame(total(staying), total(answerTo(removed)), 1e-8);
+      }),
+    );
+  });
+
   it('states the same total whatever stays on the rotor', () => {
     fc.assert(
       fc.property(rotors, ({ rotor, trials }) => {
