@@ -8,6 +8,7 @@ import { LimitSet, LimitUse } from './limit-set';
 import { Machine, MachineEvent } from './machine';
 import { Derived, MeasuredRecord, OneXVector, Reading, Waveform } from './measured-record';
 import { Person, Session, SignInAttempt, SiteAccess } from './person';
+import { Photo, WeightFixing } from './photo';
 import { Plane, Position, Rotor, RotorStay } from './rotor';
 import { Instrument, Setup } from './setup';
 import { Area, Site } from './site';
@@ -43,6 +44,8 @@ export const entities = [
   Run,
   RunVector,
   Weight,
+  WeightFixing,
+  Photo,
   Answer,
   Coefficient,
   CoefficientReuse,

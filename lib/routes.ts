@@ -35,6 +35,8 @@ export const routes = {
     signedRecord: (jobId: number) => `/api/v1/balance-jobs/${jobId}/record`,
     compute: (name: string) => `/api/v1/compute/${name}`,
     openApi: () => '/api/v1/openapi',
+    photo: (photoId: number) => `/api/internal/photos/${photoId}`,
+    thumbnail: (photoId: number) => `/api/internal/photos/${photoId}?size=thumbnail`,
     file: (uploadId: number) => `/api/internal/uploads/${uploadId}/file`,
   },
 } as const;

@@ -99,6 +99,16 @@ export const CAUTIONS = {
     needsTick: false,
     needsName: false,
   },
+  'SAF-10': {
+    id: 'SAF-10',
+    version: 1,
+    step: 'fitting a weight',
+    text:
+      'Welding on a rotor: earth clamp on the rotor next to the weld, never through the bearings. Hot-work permit, ' +
+      'fire watch and gas test as your site asks; metal that matches the wheel; no weld where its maker forbids it.',
+    needsTick: true,
+    needsName: false,
+  },
   'SAF-14': {
     id: 'SAF-14',
     version: 1,

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { JOB_KINDS, planesOf } from '@/lib/domain/balance-job/job-kinds';
 import { SLIPS } from '@/lib/domain/balance-job/slip-repair';
 import { id, optionalNumber, text, tick, typedNumber } from './number';
+import { fixingFields } from './photo-input';
 
 const ids = z.preprocess(
   (value: unknown): unknown =>
@@ -140,6 +141,7 @@ export const fitWeightInput = z.object({
   fixing: text('how the weight is fixed', 200),
   /** Engineer who agrees to a trial weight while the base is in zone D. */
   consent: z.string().trim().max(120).default(''),
+  ...fixingFields,
   standingStill: mustTick(
     'Hands on the rotor only when it stands still and every energy source is locked out. Tick it when it is so.',
   ),

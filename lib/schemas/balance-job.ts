@@ -8,6 +8,7 @@ import type {
 import type { Step } from '@/lib/domain/balance-job/next-step';
 import type { RepeatTest } from '@/lib/domain/balancing/repeat-test';
 import type { SlipTest } from '@/lib/domain/balancing/slip-tests';
+import type { FitEvidence } from './fit-evidence';
 
 export type JobState =
   'opened' | 'base taken' | 'answered' | 'signed' | 'stopped safe' | 'not a balance job';
@@ -85,7 +86,7 @@ export type LedgerWeightDto = {
   endedBy: string | null;
   enteredAngleDeg: number;
   enteredSense: 'against' | 'with';
-};
+} & FitEvidence;
 
 export type RunVectorDto = {
   pointId: number;

@@ -14,6 +14,11 @@ const BY_CONSTRAINT: Record<string, Failure> = {
     message: 'Somebody with this e-mail address is already registered.',
     field: 'email',
   },
+  photo_weight_sha256_unique: {
+    code: 'duplicate',
+    message: 'This photo is with this weight already.',
+    field: 'photo',
+  },
   upload_site_sha256_unique: {
     code: 'duplicate',
     message: 'This file is already in the register.',

@@ -3,9 +3,10 @@ import { expectAccessible, textOf } from '@/tests/support/browser-page';
 
 export type Reading = { amp: number; deg: number };
 /** Where a weight hangs: degrees against rotation, or a position by its label. */
-export type TrialWeight = { g: number; radius_mm: number } & (
+export type TrialWeight = { g: number; radius_mm: number; photo?: ChosenFile } & (
   { deg: number } | { position: string }
 );
+type ChosenFile = { name: string; mimeType: string; buffer: Buffer };
 
 const NAME = 'Ida Berg';
 
@@ -67,7 +68,10 @@ export async function typeWeight(page: Page, button: string, weight: TrialWeight
   await form.getByLabel('Radius to its centre of mass').fill(String(weight.radius_mm));
   await form.getByLabel('weighed on a scale').check();
   await typePlace(form, weight);
+  await form.getByLabel('How it is held').selectOption('temporary');
   await form.getByLabel('Fixed by').fill('clamp with locked screw');
+  if (weight.photo) await form.getByLabel(/^Photo of the weight/).setInputFiles(weight.photo);
+  else await form.getByLabel('or no photo, because').selectOption('later');
   await form.getByRole('button', { name: button }).click();
 }
 

@@ -7,6 +7,7 @@ import { allows, type Role } from '@/lib/domain/access/permissions';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { fitWeightInput } from '@/lib/schemas/balance-job-input';
 import { baseInZoneD } from '../balance-job/before-first-run';
+import { keepFixing, readFixing } from '../balance-job/fixing';
 import { limitsOf } from '../balance-job/limits-of';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
 import { recordCautions } from '../balance-job/record-cautions';
@@ -36,6 +37,8 @@ export const fitWeight = command(
       recordedAgain(loaded, place.value, input) ??
       (await roomFailure(em, plane, position, input.massG));
     if (full) return full;
+    const fixing = await readFixing(input);
+    if (!fixing.ok) return fixing;
     const weight = em.create(Weight, {
       rotor: job.rotor,
       plane,
@@ -56,13 +59,20 @@ export const fitWeight = command(
       job,
     });
     await em.flush();
+    await keepFixing(context, job, weight, fixing.value);
     const at = { jobId: job.id, personId: actor.personId, now, step: `fit weight ${weight.id}` };
     recordCautions(em, at, ['SAF-01', 'SAF-03', 'SAF-06'], input.namedPerson);
     audit({
       siteId: job.site.id,
       entity: 'Weight',
       entityId: weight.id,
-      after: { job: job.number, plane: plane.name, ...input, angleDeg },
+      after: {
+        job: job.number,
+        plane: plane.name,
+        ...input,
+        photo: fixing.value.photoName,
+        angleDeg,
+      },
     });
     return ok({ weightId: weight.id, angleDeg });
   },

@@ -13,6 +13,7 @@ import { baseRepeats } from '../balance-job/base-repeats';
 import { beforeFirstRun } from '../balance-job/before-first-run';
 import { bookPart } from '../balance-job/book-dto';
 import { checkVerdict } from '../balance-job/check-verdict';
+import { withEvidence } from '../balance-job/fit-evidence';
 import { jobInput } from '../balance-job/job-input';
 import { limitsOf } from '../balance-job/limits-of';
 import { loadJob, type LoadedJob, type LoadedRun } from '../balance-job/load-job';
@@ -46,12 +47,18 @@ export async function balanceJobDto(em: EntityManager, loaded: LoadedJob): Promi
     planes,
     points: points.map((point) => pointDto(point)),
     runs: loaded.runs.map((run) => runDto(run, names, loaded.runs)),
-    weights: weights.map((weight) => weightDto(weight)),
-    olderWeights: [
-      ...rotorWeights.filter((weight) => weight.job?.id !== job.id),
-      ...loaded.goneBefore,
-      ...loaded.removed,
-    ].map((weight) => weightDto(weight)),
+    weights: await withEvidence(
+      em,
+      weights.map((weight) => weightDto(weight)),
+    ),
+    olderWeights: await withEvidence(
+      em,
+      [
+        ...rotorWeights.filter((weight) => weight.job?.id !== job.id),
+        ...loaded.goneBefore,
+        ...loaded.removed,
+      ].map((weight) => weightDto(weight)),
+    ),
     choices: await choicesOf(em, loaded),
     step: loaded.step,
     repeats: baseRepeats(loaded),

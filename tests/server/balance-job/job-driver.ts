@@ -107,6 +107,8 @@ export class JobDriver {
       angleSense: weight.sense ?? 'against',
       arcMm: '',
       fixing: 'clamp with locked screw',
+      fixingKind: 'temporary',
+      noPhoto: 'later',
       standingStill: 'on',
       fixingHolds: 'on',
       namedPerson: 'Ida Berg',

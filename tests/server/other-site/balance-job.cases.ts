@@ -1,6 +1,7 @@
 import { SignOff } from '@/entities/caution';
 import { Run } from '@/entities/balance-job';
 import { Weight } from '@/entities/weight';
+import { addPhoto } from '@/lib/server/commands/add-photo';
 import { acceptAnswer } from '@/lib/server/commands/accept-answer';
 import { acceptBase } from '@/lib/server/commands/accept-base';
 import { confirmSlip } from '@/lib/server/commands/confirm-slip';
@@ -18,9 +19,11 @@ import { balanceJobs } from '@/lib/server/queries/balance-jobs';
 import { jobRecord } from '@/lib/server/queries/job-record';
 import { newBalanceJob } from '@/lib/server/queries/new-balance-job';
 import { signedRecord } from '@/lib/server/queries/signed-record';
+import { weightPhoto } from '@/lib/server/queries/weight-photo';
 import type { OtherSiteCase } from '@/tests/support/other-site';
 import type { SmallPlant } from '@/tests/support/plant';
 import { JobDriver, valueOf } from '../balance-job/job-driver';
+import { pngFile } from '../balance-job/photo-files';
 
 let opened: Promise<JobDriver> | null = null;
 
@@ -101,6 +104,8 @@ export const cases: OtherSiteCase[] = [
         angleSense: 'against',
         arcMm: '',
         fixing: 'clamp',
+        fixingKind: 'temporary',
+        noPhoto: 'later',
         ...ticks,
       }),
   },
@@ -257,6 +262,26 @@ export const cases: OtherSiteCase[] = [
     run: async (foreigner, plant) => {
       await homeJob(plant);
       return balanceJobs(foreigner, undefined);
+    },
+  },
+  {
+    name: 'addPhoto',
+    expects: 'not-found',
+    run: async (foreigner, plant) => {
+      const job = await homeJob(plant);
+      const weightId = (await job.sheet()).weights[0]?.id ?? 0;
+      return addPhoto(foreigner, { jobId: job.jobId, weightId, photo: await pngFile('fan.png') });
+    },
+  },
+  {
+    name: 'weightPhoto',
+    expects: 'null',
+    run: async (foreigner, plant) => {
+      const job = await homeJob(plant);
+      const weightId = (await job.sheet()).weights[0]?.id ?? 0;
+      const input = { jobId: job.jobId, weightId, photo: await pngFile('home.png') };
+      const { photoId } = valueOf(await addPhoto(job.actor, input));
+      return weightPhoto(foreigner, { photoId, size: 'thumbnail' });
     },
   },
 ];

@@ -9,6 +9,7 @@ import { formatDegrees, formatForInput, formatMass } from '@/lib/format';
 import type { ActionState } from '@/lib/schemas/action-state';
 import type { BalanceJobDto, PlaneDto } from '@/lib/schemas/balance-job';
 import { fitWeightAction } from './actions';
+import { FixingFields } from './fixing-fields';
 import { PlaceFields } from './place-fields';
 import { StepForm } from './step-form';
 
@@ -74,7 +75,7 @@ export function WeightForm({ job, plane, purpose, proposedG }: WeightFormProps) 
               state={state}
             />
           )}
-          <Field name="fixing" label="Fixed by" state={state} hint="bolt, clamp, weld, rivet" />
+          <FixingFields state={state} />
         </>
       )}
     </StepForm>

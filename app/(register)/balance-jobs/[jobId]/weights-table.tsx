@@ -12,6 +12,7 @@ import type { BalanceJobDto, LedgerWeightDto } from '@/lib/schemas/balance-job';
 import { takeOffWeightAction } from './actions';
 import { FoundWeight, NotAsListed } from './ledger-check';
 import { StepForm } from './step-form';
+import { WeightPhotos } from './weight-photos';
 
 type WeightsTableProps = { job: BalanceJobDto; mayRecord: boolean };
 
@@ -47,6 +48,7 @@ function Ledger({ job, open, weights }: LedgerProps) {
           <Th numeric>place</Th>
           <Th numeric>radius</Th>
           <Th>what</Th>
+          <Th>photo</Th>
           <Th>fitted</Th>
           <Th>now</Th>
         </tr>
@@ -62,8 +64,11 @@ function Ledger({ job, open, weights }: LedgerProps) {
             </Td>
             <Td numeric>{formatQuantity(weight.radiusMm, 'mm')}</Td>
             <Td>
-              {weight.purpose}, {weight.fixing}
+              {weight.purpose}, {fixingOf(weight)}
               {weight.enteredSense === 'with' && ', typed with rotation'}
+            </Td>
+            <Td>
+              <WeightPhotos jobId={job.id} weight={weight} mayAdd={open && isOwn(job, weight)} />
             </Td>
             <Td>
               {formatDateTime(weight.fittedAt, job.site.timeZone)}, {weight.fittedBy}
@@ -111,13 +116,22 @@ function TakeOff({ job, weight }: { job: BalanceJobDto; weight: LedgerWeightDto 
 }
 
 function WeightActions({ job, weight }: { job: BalanceJobDto; weight: LedgerWeightDto }) {
-  const older = !job.weights.some(({ id }) => id === weight.id);
+  const older = !isOwn(job, weight);
   return (
     <div className="flex flex-wrap gap-1">
       <TakeOff job={job} weight={weight} />
       {older && <NotAsListed job={job} weight={weight} />}
     </div>
   );
+}
+
+/** Fitted in this job. */
+function isOwn(job: BalanceJobDto, weight: LedgerWeightDto): boolean {
+  return job.weights.some(({ id }) => id === weight.id);
+}
+
+function fixingOf({ fixing, fixedBy }: LedgerWeightDto): string {
+  return fixedBy && fixedBy.kind !== 'temporary' ? `${fixedBy.kind}, ${fixing}` : fixing;
 }
 
 function stateOf(weight: LedgerWeightDto): string {

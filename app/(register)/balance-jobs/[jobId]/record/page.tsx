@@ -15,6 +15,7 @@ import { Faces } from '../faces';
 import { RunsTable } from '../runs-table';
 import { WeightsTable } from '../weights-table';
 import { CautionsTable } from './cautions-table';
+import { PhotosPanel } from './photos-panel';
 import { PrintButton } from './print-button';
 import { RecordHead } from './record-head';
 import { SignOffStrip } from './sign-off-strip';
@@ -77,6 +78,7 @@ export default async function JobRecordPage({ params }: Props) {
       <div className="grid gap-6 lg:grid-cols-2 print:block">
         <Faces job={job} />
       </div>
+      <PhotosPanel job={job} />
       <ToleranceTable job={job} />
       <CautionsTable cautions={record.cautions} timeZone={job.site.timeZone} />
       <SignOffStrip job={job} areaOwner={record.signed?.areaOwner ?? null} />
