@@ -17,11 +17,11 @@ export const NO_PHOTO_REASONS = [
   'other',
 ] as const;
 
-/** A chosen file; an empty file box sends a nameless file of no bytes. */
+/** A chosen file; an empty file box sends a file of no bytes, with no name or with “undefined”. */
 const chosenFile = z
   .union([z.instanceof(File), z.literal(''), z.null()], { error: 'Choose a photo.' })
   .default(null)
-  .transform((file) => (file instanceof File && (file.size > 0 || file.name !== '') ? file : null));
+  .transform((file) => (file instanceof File && file.size > 0 ? file : null));
 
 /** What a fit card says of fixing and photo, beside mass and place. */
 export const fixingFields = {

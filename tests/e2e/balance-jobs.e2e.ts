@@ -9,6 +9,7 @@ import {
   WIDTHS,
 } from '@/tests/support/browser-page';
 import { openChromium } from '@/tests/support/chromium';
+import { pngFile } from '@/tests/server/balance-job/photo-files';
 import {
   acceptBase,
   openJob,
@@ -66,7 +67,18 @@ describe('S01: one plane, three base runs, the trial taken off, one trim', () =>
     await typeRun(page, 'Record trial run', [inputs.trial_run], inputs.trial_run.speed);
     await settleTrial(page, /taken off/);
     expect(await takeAnswer(page, 'Use this answer')).toContain('26.3 g at 36°');
-    await typeWeight(page, 'Record weight in plane W', inputs.installed_1);
+    const photo = await pngFile('fan.png', 800, 600);
+    const buffer = Buffer.from(await photo.arrayBuffer());
+    await typeWeight(page, 'Record weight in plane W', {
+      ...inputs.installed_1,
+      photo: { name: photo.name, mimeType: photo.type, buffer },
+    });
+    // 26 g at 35°, as the scenario has it fitted.
+    const thumbnail = page.getByAltText(/Photo of 26\.0\sg in plane W at 35°\sagainst\srotation/);
+    await thumbnail.scrollIntoViewIfNeeded();
+    const loadedPx = (image: HTMLImageElement) => image.decode().then(() => image.naturalWidth);
+    expect(await thumbnail.evaluate(loadedPx)).toBe(320);
+    await expectAccessible(page);
     await typeRun(page, 'Record check run', [inputs.check_run_1], inputs.check_run_1.speed);
     const trim = await takeAnswer(page, 'Use this trim');
     // 2.85 g at 297.1°, shown to a tenth each.
@@ -74,6 +86,10 @@ describe('S01: one plane, three base runs, the trial taken off, one trim', () =>
     await typeWeight(page, 'Record weight in plane W', inputs.installed_2);
     await typeRun(page, 'Record check run', [inputs.check_run_2], inputs.check_run_2.speed);
     await signJob(page, 'Small remaining miss.');
+    await page.goto(`${page.url()}/record`);
+    // Small in the ledger and large among the photos, of the frozen record.
+    expect(await page.getByAltText(/^Photo of 26\.0/).count()).toBe(2);
+    await expectAccessible(page);
     await page.goto(address);
     const sheet = await textOf(page);
     // The ledger's sum: 10 259.9 g·mm at 28.4°, as one weight 25.65 g on 400 mm.

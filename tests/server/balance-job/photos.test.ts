@@ -60,6 +60,8 @@ const textFile = () => new File(['time,signal\n0,1\n'], 'fan.jpg', { type: 'imag
 describe('a fit card without what it needs records nothing', () => {
   it.each<[string, More, string]>([
     ['neither photo nor reason', {}, 'photo-needed'],
+    // What a browser sends for a file box that was left alone.
+    ['an empty file box', { photo: new File([], 'undefined') }, 'photo-needed'],
     [
       'another reason that is not written',
       { noPhoto: 'other', noPhotoOther: ' ' },

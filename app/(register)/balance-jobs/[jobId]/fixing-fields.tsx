@@ -27,7 +27,10 @@ const SECURED: Readonly<Record<string, string>> = {
   clip: 'The clip is locked and sits where turning seats it.',
 };
 
-/** How the weight is held, what that needs, and a photo of it with the mark in the picture. */
+/**
+ * How the weight is held, what that needs, and a photo of it with the mark in the picture. The
+ * two choices keep their own value: a failed action resets a form, and the box shows what was typed.
+ */
 export function FixingFields({ state }: { state: ActionState }) {
   const [kind, setKind] = useState('');
   const [noPhoto, setNoPhoto] = useState('');
@@ -40,7 +43,6 @@ export function FixingFields({ state }: { state: ActionState }) {
         placeholder="Choose how"
         options={KINDS}
         state={state}
-        value={kind}
         onChange={(event) => setKind(event.target.value)}
       />
       <Field name="fixing" label="Fixed by" state={state} hint="size and piece: M8 bolt, clamp" />
@@ -71,7 +73,6 @@ export function FixingFields({ state }: { state: ActionState }) {
         placeholder="A photo is taken"
         options={NO_PHOTO_REASONS.map((reason) => ({ value: reason, label: reason }))}
         state={state}
-        value={noPhoto}
         onChange={(event) => setNoPhoto(event.target.value)}
       />
       {noPhoto === 'other' && (

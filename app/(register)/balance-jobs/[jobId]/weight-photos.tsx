@@ -20,7 +20,7 @@ export function WeightPhotos({ jobId, weight, mayAdd }: WeightPhotosProps) {
   const photos = weight.photos ?? [];
   const missing = photos.length === 0 ? weight.fixedBy?.noPhotoReason : null;
   return (
-    <div className="flex flex-wrap items-center gap-2">
+    <div className="flex flex-col items-start gap-2 whitespace-nowrap">
       {photos.map((photo) => (
         <a key={photo.id} href={routes.api.photo(photo.id)} target="_blank" rel="noreferrer">
           <Image

@@ -48,7 +48,6 @@ function Ledger({ job, open, weights }: LedgerProps) {
           <Th numeric>place</Th>
           <Th numeric>radius</Th>
           <Th>what</Th>
-          <Th>photo</Th>
           <Th>fitted</Th>
           <Th>now</Th>
         </tr>
@@ -66,8 +65,6 @@ function Ledger({ job, open, weights }: LedgerProps) {
             <Td>
               {weight.purpose}, {fixingOf(weight)}
               {weight.enteredSense === 'with' && ', typed with rotation'}
-            </Td>
-            <Td>
               <WeightPhotos jobId={job.id} weight={weight} mayAdd={open && isOwn(job, weight)} />
             </Td>
             <Td>

@@ -22,6 +22,8 @@ export function PhotosPanel({ job }: { job: BalanceJobDto }) {
               width={photo.widthPx}
               height={photo.heightPx}
               unoptimized
+              // A page that is printed at once has its pictures.
+              loading="eager"
               className="h-auto max-h-96 w-auto max-w-full rounded border border-edge"
             />
             <figcaption className="text-xs text-ink-soft">
