@@ -128,6 +128,8 @@ it('in zone D a trial weight needs an engineer, or one who is named', async () =
       angleSense: 'against',
       arcMm: '',
       fixing: 'clamp',
+      fixingKind: 'temporary',
+      noPhoto: 'later',
       consent: 'Aldo Marsh',
       standingStill: 'on',
       fixingHolds: 'on',
