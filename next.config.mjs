@@ -5,7 +5,12 @@ const nextConfig = {
   agentRules: false,
   // The browser suite builds into its own folder, so that it never touches a running server's build.
   distDir: process.env.EVENRUN_DIST ?? '.next',
-  serverExternalPackages: ['@mikro-orm/postgresql', '@mikro-orm/migrations', '@mikro-orm/seeder'],
+  serverExternalPackages: [
+    '@mikro-orm/postgresql',
+    '@mikro-orm/migrations',
+    '@mikro-orm/seeder',
+    'pdfkit',
+  ],
   experimental: {
     agentUpgrade: false,
     authInterrupts: true,

@@ -1,3 +1,4 @@
+import { Addendum } from './addendum';
 import { Answer, Coefficient } from './answer';
 import { AuditEvent } from './audit-event';
 import { BalanceJob, JobPlane, JobPoint, Run, RunVector } from './balance-job';
@@ -51,6 +52,7 @@ export const entities = [
   CoefficientReuse,
   CautionShown,
   SignOff,
+  Addendum,
   Person,
   SiteAccess,
   Session,

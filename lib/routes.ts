@@ -33,6 +33,8 @@ export const routes = {
       `/api/internal/readings/${recordId}/spectrum${query}`,
     uploadPreview: (uploadId: number) => `/api/internal/uploads/${uploadId}/preview`,
     signedRecord: (jobId: number) => `/api/v1/balance-jobs/${jobId}/record`,
+    jobRecordPdf: (jobId: number, paper: 'a4' | 'letter') =>
+      `/api/v1/balance-jobs/${jobId}/record/pdf?paper=${paper}`,
     compute: (name: string) => `/api/v1/compute/${name}`,
     openApi: () => '/api/v1/openapi',
     photo: (photoId: number) => `/api/internal/photos/${photoId}`,

@@ -1,5 +1,6 @@
 import { polarPlace, screenDeg, type Sense } from '@/lib/domain/drawing/face-view';
 import { spreadApart } from '@/lib/domain/drawing/leader-rows';
+import { outerCircle } from '@/lib/domain/drawing/outer-circle';
 import { formatLag, formatNumber, formatQuantity } from '@/lib/format';
 import { Table, Td, Th, RowHead } from '@/components/ui/table';
 import { HALO } from './face-layout';
@@ -23,7 +24,7 @@ const MOST_WORDS = 6;
 
 /** The 1x vector's path over runs or dates, in a polar plot with its numbers as a table. */
 export function VectorWalk({ title, unit, steps, counts = 'cw' }: VectorWalkProps) {
-  const outer = roundUp(Math.max(0, ...steps.map(({ amplitude }) => amplitude)));
+  const outer = outerCircle(Math.max(0, ...steps.map(({ amplitude }) => amplitude)));
   const turning = counts === 'cw' ? 'ccw' : 'cw';
   const places = steps.map((step) => ({
     step,
@@ -106,11 +107,4 @@ function WalkTable({ title, unit, steps }: Omit<VectorWalkProps, 'counts'>) {
       </Table>
     </details>
   );
-}
-
-/** The next 1, 2, 3 or 5 times a power of ten: a round outer circle. */
-function roundUp(value: number): number {
-  if (value <= 0) return 1;
-  const power = 10 ** Math.floor(Math.log10(value));
-  return power * ([1, 2, 3, 5].find((step) => step * power >= value) ?? 10);
 }

@@ -263,7 +263,15 @@ export type BalanceJobDto = {
   machine: { id: number; tag: string; name: string; nominalSpeedRpm: number };
   rotor: { name: string; massKg: number | null; grade: number | null; behaviour: string };
   setup: SetupDto;
-  limits: { title: string; edition: string; bAb: number; bBc: number; bCd: number } | null;
+  limits: {
+    title: string;
+    edition: string;
+    /** Of the boundaries; records signed early do not carry it and were judged in mm/s rms. */
+    unit?: string;
+    bAb: number;
+    bBc: number;
+    bCd: number;
+  } | null;
   planes: PlaneDto[];
   points: PointDto[];
   runs: RunDto[];

@@ -24,6 +24,9 @@ export const PERMISSIONS = {
   'balanceJob:record': AT_THE_MACHINE,
   'balanceJob:override': BY_JUDGEMENT,
   'balanceJob:sign': AT_THE_MACHINE,
+  /** A further signature under a signed record: the engineer, or the owner of the area. */
+  'balanceJob:cosign': ['technician', 'engineer', 'planner', 'administrator'],
+  'balanceJob:addendum': AT_THE_MACHINE,
   'dueBoard:read': EVERYONE,
   'workbench:use': EVERYONE,
   'limitSet:read': EVERYONE,

@@ -14,6 +14,6 @@ export async function limitsOf(
     { populate: ['limitSet'] },
   );
   if (!use) return null;
-  const { title, edition, bAb, bBc, bCd } = use.limitSet.$;
-  return { title, edition, bAb, bBc, bCd };
+  const { title, edition, unit, bAb, bBc, bCd } = use.limitSet.$;
+  return { title, edition, unit, bAb, bBc, bCd };
 }

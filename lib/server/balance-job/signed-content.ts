@@ -1,9 +1,13 @@
 import 'server-only';
 import { z } from 'zod';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
+import type { RecordExtras } from './record-extras';
 
-/** What a signature freezes: the job as its record shows it, and who took the machine back. */
-export type SignedJob = BalanceJobDto & { areaOwner: string };
+/**
+ * What a signature freezes: the job as its record shows it, and who took the machine back. Records
+ * signed early hold no equipment and no cautions; those are facts of their own.
+ */
+export type SignedJob = BalanceJobDto & { areaOwner: string } & Partial<RecordExtras>;
 
 const outline = z.looseObject({
   id: z.number(),

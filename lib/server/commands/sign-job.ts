@@ -1,5 +1,4 @@
 import 'server-only';
-import { createHash } from 'node:crypto';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { z } from 'zod';
 import { Coefficient } from '@/entities/answer';
@@ -9,11 +8,12 @@ import { gradeOf } from '@/lib/domain/balancing/coefficient-book';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { signJobInput } from '@/lib/schemas/balance-job-input';
-import { canonicalJson } from '../balance-job/canonical-json';
+import { contentHash as hashOf } from '../balance-job/canonical-json';
 import { checkVerdict } from '../balance-job/check-verdict';
 import { jobInput } from '../balance-job/job-input';
 import { loadJob, type LoadedJob } from '../balance-job/load-job';
 import { recordCautions } from '../balance-job/record-cautions';
+import { recordExtras } from '../balance-job/record-extras';
 import { changedOnRotor } from '../balance-job/weights-on-rotor';
 import { command, type CommandContext } from '../command';
 import { balanceJobDto } from '../queries/balance-job';
@@ -180,8 +180,12 @@ async function freeze(
   loaded: LoadedJob,
   { statement, areaOwner }: Input,
 ): Promise<string> {
-  const content = { ...(await balanceJobDto(em, await loadJob(em, loaded.job))), areaOwner };
-  const contentHash = createHash('sha256').update(canonicalJson(content)).digest('hex');
+  const content = {
+    ...(await balanceJobDto(em, await loadJob(em, loaded.job))),
+    ...(await recordExtras(em, loaded.job)),
+    areaOwner,
+  };
+  const contentHash = hashOf(content);
   em.create(SignOff, {
     job: loaded.job,
     person: actor.personId,

@@ -221,7 +221,11 @@ async function choicesOf(em: EntityManager, loaded: LoadedJob) {
 }
 
 async function signOffsOf(em: EntityManager, jobId: number): Promise<BalanceJobDto['signOffs']> {
-  const signed = await em.find(SignOff, { job: jobId }, { orderBy: { at: 'asc' } });
+  return signOffDtos(await em.find(SignOff, { job: jobId }, { orderBy: { at: 'asc', id: 'asc' } }));
+}
+
+/** Signatures as a record shows them. */
+export function signOffDtos(signed: readonly SignOff[]): BalanceJobDto['signOffs'] {
   return signed.map(({ personName, role, statement, at, contentHash }) => ({
     personName,
     role,

@@ -1,62 +1,52 @@
 import 'server-only';
-import { createHash } from 'node:crypto';
-import { CautionShown, SignOff } from '@/entities/caution';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
-import { canonicalJson } from '../balance-job/canonical-json';
-import { loadJob } from '../balance-job/load-job';
+import type { JobRecordDto, SignedState } from '@/lib/schemas/job-record';
+import { loadJob, type VisibleJob } from '../balance-job/load-job';
+import { loadSigned, type SignedRecord } from '../balance-job/load-signed';
+import { recordExtras, type RecordExtras } from '../balance-job/record-extras';
 import { signedContent } from '../balance-job/signed-content';
-import { query } from '../query';
+import { query, type QueryContext } from '../query';
+import { jobReport } from '../report/job-report';
 import { visibleJob } from '../scope';
-import { balanceJobDto } from './balance-job';
-
-export type CautionLine = {
-  cautionId: string;
-  step: string;
-  namedPerson: string | null;
-  person: string;
-  at: string;
-};
-
-export type JobRecordDto = {
-  job: BalanceJobDto;
-  /** Set once signed: what was frozen, and whether it still has the hash that was signed. */
-  signed: { contentHash: string; areaOwner: string; intact: boolean } | null;
-  cautions: CautionLine[];
-};
+import { balanceJobDto, signOffDtos } from './balance-job';
 
 /** The job record: as signed where it is signed, as it stands otherwise. */
 export const jobRecord = query(
   'balanceJob:read',
   async (context, jobId: number): Promise<JobRecordDto | null> => {
-    const { em } = context;
     const job = await visibleJob(context, jobId);
     if (!job) return null;
-    const live = await balanceJobDto(em, await loadJob(em, job));
-    const signOff = await em.findOne(SignOff, { job: job.id }, { orderBy: { at: 'asc' } });
-    const cautions = await em.find(
-      CautionShown,
-      { job: job.id },
-      { orderBy: { id: 'asc' }, populate: ['person'] },
-    );
-    const frozen = signOff && signedContent(signOff.content);
+    const record = await loadSigned(context.em, job.id);
+    const { dto, extras } = record ? frozen(record) : await live(context, job);
+    const { cautions, equipment } = { ...(await recordExtras(context.em, job)), ...extras };
+    const signed = record && stateOf(record);
+    const asked = { by: context.actor.name, at: context.now };
     return {
-      job: frozen ? { ...frozen, signOffs: live.signOffs } : live,
-      signed: frozen && {
-        contentHash: signOff.contentHash,
-        areaOwner: frozen.areaOwner,
-        intact: hashOf(signOff.content) === signOff.contentHash,
-      },
-      cautions: cautions.map((shown) => ({
-        cautionId: shown.cautionId,
-        step: shown.step,
-        namedPerson: shown.namedPerson ?? null,
-        person: shown.person.$.name,
-        at: shown.at.toISOString(),
-      })),
+      job: dto,
+      signed,
+      hasSigned:
+        record?.signOffs.some(({ person }) => person.id === context.actor.personId) ?? false,
+      report: jobReport({ job: dto, equipment, cautions, signed, asked }),
     };
   },
 );
 
-function hashOf(content: unknown): string {
-  return createHash('sha256').update(canonicalJson(content)).digest('hex');
+type Content = { dto: BalanceJobDto; extras: Partial<RecordExtras> };
+
+function frozen({ first, signOffs }: SignedRecord): Content {
+  const { equipment, cautions, ...content } = signedContent(first.content);
+  return {
+    dto: { ...content, signOffs: signOffDtos(signOffs) },
+    extras: { ...(equipment && { equipment }), ...(cautions && { cautions }) },
+  };
+}
+
+async function live({ em }: QueryContext, job: VisibleJob): Promise<Content> {
+  return { dto: await balanceJobDto(em, await loadJob(em, job)), extras: {} };
+}
+
+function stateOf(record: SignedRecord): SignedState {
+  const { first, intact, addenda, addendaIntact } = record;
+  const { areaOwner } = signedContent(first.content);
+  return { contentHash: first.contentHash, areaOwner, intact, addenda, addendaIntact };
 }

@@ -1,6 +1,6 @@
 import 'server-only';
-import { SignOff } from '@/entities/caution';
 import type { SignedRecordFile } from '@/lib/schemas/signed-record';
+import { loadSigned } from '../balance-job/load-signed';
 import { query } from '../query';
 import { visibleJob } from '../scope';
 
@@ -10,8 +10,9 @@ export const signedRecord = query(
   async (context, jobId: number): Promise<SignedRecordFile | null> => {
     const job = await visibleJob(context, jobId);
     if (!job) return null;
-    const signOff = await context.em.findOne(SignOff, { job: job.id }, { orderBy: { at: 'asc' } });
-    if (!signOff) return null;
+    const record = await loadSigned(context.em, job.id);
+    if (!record) return null;
+    const { first, signOffs, addenda } = record;
     return {
       kind: 'Evenrun job record',
       version: 1,
@@ -21,14 +22,23 @@ export const signedRecord = query(
         phase: 'lag, the turn from the mark at the tacho to the next positive peak',
         model: 'V = V0 + H*U, U = mass*radius at the angle',
       },
-      signedAt: signOff.at.toISOString(),
-      signedBy: signOff.personName,
-      role: signOff.role,
-      statement: signOff.statement,
+      signedAt: first.at.toISOString(),
+      signedBy: first.personName,
+      role: first.role,
+      statement: first.statement,
       hashedAs:
-        'SHA-256 over the UTF-8 text of content as JSON, keys of every object in ascending order, no white space',
-      contentHash: signOff.contentHash,
-      content: signOff.content,
+        'SHA-256 over the UTF-8 text of content as JSON, keys of every object in ascending order, no white space (RFC 8785)',
+      contentHash: first.contentHash,
+      content: first.content,
+      signatures: signOffs.map(({ personName, role, statement, at }) => ({
+        name: personName,
+        role,
+        statement,
+        at: at.toISOString(),
+      })),
+      addendaHashedAs:
+        'The same over each addendum without its hash; previousHash is contentHash for the first, then the hash of the one before',
+      addenda,
     };
   },
 );

@@ -1,0 +1,23 @@
+import 'server-only';
+import type { Report } from '@/lib/schemas/report';
+import { problem } from '../route-handler';
+import { paperOf } from './paper';
+import { reportPdf } from './report-pdf';
+
+/** A report as a PDF on the paper that the address asks for. */
+export async function pdfResponse(
+  report: Report,
+  request: Request,
+  name: string,
+): Promise<Response> {
+  const paper = paperOf(new URL(request.url).searchParams);
+  if (!paper.ok) return problem(400, 'No such paper', paper.failure.message);
+  const bytes = await reportPdf(report, paper.value);
+  return new Response(new Uint8Array(bytes), {
+    headers: {
+      'content-type': 'application/pdf',
+      'content-disposition': `inline; filename="${encodeURIComponent(name)}"`,
+      'cache-control': 'private, no-store',
+    },
+  });
+}
