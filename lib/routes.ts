@@ -16,6 +16,8 @@ export const routes = {
   newBalanceJob: (machineId: number) => `/machines/${machineId}/new-balance-job`,
   balanceJob: (jobId: number) => `/balance-jobs/${jobId}`,
   jobRecord: (jobId: number) => `/balance-jobs/${jobId}/record`,
+  verifyRecord: (code = '') =>
+    code === '' ? '/balance-jobs/verify' : `/balance-jobs/verify?code=${encodeURIComponent(code)}`,
   dueBoard: (query = '') => `/due-board${query}`,
   workbench: (query = '') => `/workbench${query}`,
   settings: () => '/settings',
@@ -35,6 +37,7 @@ export const routes = {
     signedRecord: (jobId: number) => `/api/v1/balance-jobs/${jobId}/record`,
     jobRecordPdf: (jobId: number, paper: 'a4' | 'letter') =>
       `/api/v1/balance-jobs/${jobId}/record/pdf?paper=${paper}`,
+    recordCheck: () => '/api/internal/record-check',
     compute: (name: string) => `/api/v1/compute/${name}`,
     openApi: () => '/api/v1/openapi',
     photo: (photoId: number) => `/api/internal/photos/${photoId}`,

@@ -1,6 +1,15 @@
 /** What one of our own handlers answers; a failure is thrown as the sentence a person reads. */
-export async function fetchJson<Value>(address: string, signal: AbortSignal): Promise<Value> {
-  const response = await fetch(address, { signal });
+export function fetchJson<Value>(address: string, signal: AbortSignal): Promise<Value> {
+  return answered<Value>(address, { signal });
+}
+
+/** The same for text that is sent along to be looked at. */
+export function postForJson<Value>(address: string, body: string): Promise<Value> {
+  return answered<Value>(address, { method: 'POST', body });
+}
+
+async function answered<Value>(address: string, request: RequestInit): Promise<Value> {
+  const response = await fetch(address, request);
   if (!response.ok) throw new Error(await sentenceOf(response));
   // The handler and its caller share the DTO type; nothing else answers at this address.
   return (await response.json()) as Value;

@@ -74,6 +74,14 @@ const BY_CONSTRAINT: Record<string, Failure> = {
     code: 'superseded',
     message: 'This record was corrected a moment ago. Open the newer one.',
   },
+  sign_off_job_person_unique: {
+    code: 'signed-already',
+    message: 'You signed this record already. A second pair of eyes signs it.',
+  },
+  addendum_job_number_unique: {
+    code: 'busy',
+    message: 'Somebody added an addendum at the same moment. Read it, then add yours again.',
+  },
   run_job_number_unique: {
     code: 'busy',
     message:

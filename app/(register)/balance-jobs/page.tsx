@@ -24,7 +24,11 @@ export default async function BalanceJobsPage() {
   const timeZone = actor.sites[0]?.timeZone ?? 'UTC';
   return (
     <>
-      <PageHead title="Balance jobs" note={`${open.length} open, ${closed.length} closed`} />
+      <PageHead
+        title="Balance jobs"
+        note={`${open.length} open, ${closed.length} closed`}
+        actions={<LinkButton href={routes.verifyRecord()}>Check a job record</LinkButton>}
+      />
       {rows.length === 0 ? (
         <EmptyState
           title="No balance job yet"

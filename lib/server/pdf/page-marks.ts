@@ -47,5 +47,5 @@ function writeFoot({ doc, left, width }: Sheet, report: Report): void {
 
 function hashLine({ contentHash, revision }: Report): string {
   if (contentHash === null) return revision;
-  return `content ${contentHash} · code to check it: ${shortCode(contentHash)}`;
+  return `content ${contentHash} · check it with ${shortCode(contentHash)}`;
 }

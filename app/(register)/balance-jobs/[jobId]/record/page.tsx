@@ -4,10 +4,12 @@ import { cache } from 'react';
 import { ReportBody } from '@/components/report/report-body';
 import { Notice } from '@/components/ui/notice';
 import { PageHead } from '@/components/ui/page-head';
+import { allows } from '@/lib/domain/access/permissions';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
 import { idOf } from '@/lib/server/address-numbers';
 import { jobRecord } from '@/lib/server/queries/job-record';
+import { AfterSigning } from './after-signing';
 import { PhotosPanel } from './photos-panel';
 import { TakeAway } from './take-away';
 
@@ -22,8 +24,13 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 }
 
 export default async function JobRecordPage({ params }: Props) {
-  const record = await load(params);
-  const { job, signed, report } = record;
+  const { role } = await requireActor();
+  const { job, signed, hasSigned, report } = await load(params);
+  const may = {
+    addAddendum: allows(role, 'balanceJob:addendum'),
+    cosign: !hasSigned && allows(role, 'balanceJob:cosign'),
+    signAsEngineer: allows(role, 'balanceJob:override'),
+  };
   const crumbs = [
     { label: 'Balance jobs', href: routes.balanceJobs() },
     { label: `Job ${job.number}`, href: routes.balanceJob(job.id) },
@@ -50,6 +57,7 @@ export default async function JobRecordPage({ params }: Props) {
       {!signed && <Notice kind="info">Not signed: this record still follows the job.</Notice>}
       <ReportBody report={report} />
       <PhotosPanel job={job} />
+      {signed && <AfterSigning jobId={job.id} may={may} />}
     </>
   );
 }

@@ -1,3 +1,5 @@
+import Link from 'next/link';
+import { shortCode } from '@/lib/domain/balance-job/record-code';
 import { routes } from '@/lib/routes';
 import { PrintButton } from './print-button';
 
@@ -14,9 +16,14 @@ export function TakeAway({ jobId, contentHash }: TakeAwayProps) {
         PDF, Letter
       </a>
       {contentHash !== null && (
-        <a className="link" href={routes.api.signedRecord(jobId)} download>
-          As JSON
-        </a>
+        <>
+          <a className="link" href={routes.api.signedRecord(jobId)} download>
+            As JSON
+          </a>
+          <Link className="link" href={routes.verifyRecord(shortCode(contentHash))}>
+            Is it as signed?
+          </Link>
+        </>
       )}
       <PrintButton />
     </>
