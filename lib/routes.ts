@@ -5,6 +5,7 @@ export const routes = {
   plantBook: (query = '') => `/plant-book${query}`,
   newMachine: () => '/plant-book/new',
   machine: (machineId: number) => `/machines/${machineId}`,
+  machineHistory: (machineId: number) => `/machines/${machineId}/history`,
   machineEdit: (machineId: number) => `/machines/${machineId}/edit`,
   point: (pointId: number) => `/points/${pointId}`,
   reading: (recordId: number) => `/readings/${recordId}`,
@@ -37,6 +38,8 @@ export const routes = {
     signedRecord: (jobId: number) => `/api/v1/balance-jobs/${jobId}/record`,
     jobRecordPdf: (jobId: number, paper: 'a4' | 'letter') =>
       `/api/v1/balance-jobs/${jobId}/record/pdf?paper=${paper}`,
+    machineHistoryPdf: (machineId: number, paper: 'a4' | 'letter') =>
+      `/api/v1/machines/${machineId}/history/pdf?paper=${paper}`,
     recordCheck: () => '/api/internal/record-check',
     compute: (name: string) => `/api/v1/compute/${name}`,
     openApi: () => '/api/v1/openapi',

@@ -1,3 +1,4 @@
+import { shortCode } from '@/lib/domain/balance-job/record-code';
 import type { Report } from '@/lib/schemas/report';
 
 /**
@@ -5,8 +6,11 @@ import type { Report } from '@/lib/schemas/report';
  * the hash. The paper is left to the print dialog, so that A4 and Letter both fit.
  */
 export function PrintMarks({ report }: { report: Report }) {
-  const { about, revision, convention, contentHash, made } = report;
-  const foot = [convention, contentHash ? `content ${contentHash}` : revision, made];
+  const { about, revision, convention, contentHash, isDraft, made } = report;
+  const hash = contentHash
+    ? [`content ${contentHash} · check it with ${shortCode(contentHash)}`]
+    : [];
+  const foot = [convention, ...(isDraft ? [revision] : hash), made];
   return (
     <style>{`@page {
   size: auto;

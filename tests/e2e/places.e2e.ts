@@ -38,6 +38,7 @@ async function addresses(page: Page): Promise<string[]> {
     routes.plantBook(),
     routes.plantBook('?layout=tree'),
     machine,
+    `${machine}/history`,
     point,
     reading,
     routes.inTray(),
@@ -46,6 +47,9 @@ async function addresses(page: Page): Promise<string[]> {
     jobs[0] ?? '',
     closed,
     `${closed}/record`,
+    routes.verifyRecord(),
+    routes.verifyRecord('4f0a 91c2 77de 0b13'),
+    routes.verifyRecord('no code'),
     routes.dueBoard(),
     ...['', '?tool=two-planes', '?tool=tolerance', '?tool=split'].map((query) =>
       routes.workbench(query),

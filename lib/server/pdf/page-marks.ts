@@ -39,13 +39,14 @@ function writeFoot({ doc, left, width }: Sheet, report: Report): void {
     .strokeColor('black')
     .stroke();
   doc.font('plain').fontSize(6.8).fillColor('black');
-  const lines = [report.convention, hashLine(report), report.made];
+  const lines = [report.convention, ...hashLines(report), report.made];
   lines.forEach((text, index) => {
     doc.text(text, left, y + 5 + index * 10, { width, lineBreak: false });
   });
 }
 
-function hashLine({ contentHash, revision }: Report): string {
-  if (contentHash === null) return revision;
-  return `content ${contentHash} · check it with ${shortCode(contentHash)}`;
+function hashLines({ contentHash, isDraft, revision }: Report): string[] {
+  if (contentHash !== null)
+    return [`content ${contentHash} · check it with ${shortCode(contentHash)}`];
+  return isDraft ? [revision] : [];
 }

@@ -6,6 +6,7 @@ import { readRecordFile } from '@/lib/server/balance-job/record-file';
 import { addAddendum } from '@/lib/server/commands/add-addendum';
 import { cosignRecord } from '@/lib/server/commands/cosign-record';
 import { checkedRecords } from '@/lib/server/queries/checked-records';
+import { machineHistory } from '@/lib/server/queries/machine-history';
 import { recordOfFile } from '@/lib/server/queries/record-of-file';
 import { signedRecord } from '@/lib/server/queries/signed-record';
 import type { OtherSiteCase } from '@/tests/support/other-site';
@@ -32,6 +33,11 @@ async function fileAs(reader: Actor, jobId: number) {
 }
 
 export const cases: OtherSiteCase[] = [
+  {
+    name: 'machineHistory',
+    expects: 'null',
+    run: (foreigner, plant) => machineHistory(foreigner, plant.home.machineId),
+  },
   {
     name: 'addAddendum',
     expects: 'not-found',

@@ -27,13 +27,15 @@ export function FileCheck() {
     <div className="flex flex-col gap-4">
       <div
         {...getRootProps()}
-        className={`flex flex-wrap items-center gap-x-4 gap-y-2 rounded border border-dashed p-4 ${isDragActive ? 'border-blue bg-blue-wash' : 'border-edge'}`}
+        className={`rounded border border-dashed p-4 ${isDragActive ? 'border-blue bg-blue-wash' : 'border-edge'}`}
       >
         <input {...getInputProps({ 'aria-label': 'Job record as JSON' })} />
-        <Button pending={check.isPending} onClick={open}>
-          Choose the JSON file
-        </Button>
-        <p className="text-ink-soft">or drop it here. It is looked at and not stored.</p>
+        <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
+          <Button pending={check.isPending} onClick={open}>
+            Choose the JSON file
+          </Button>
+          <p className="text-ink-soft">or drop it here. It is looked at and not stored.</p>
+        </div>
       </div>
       <div aria-live="polite">
         {check.isError && (

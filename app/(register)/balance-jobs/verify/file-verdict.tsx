@@ -50,6 +50,7 @@ function Matched({ name, match }: { name: string; match: RecordFileMatchDto }) {
           none="Content and signature read the same."
         />
       )}
+      <p className="font-semibold">The record in the register itself:</p>
       <RecordVerdict record={record} />
     </>
   );

@@ -47,6 +47,7 @@ export default async function MachinePage({ params }: Props) {
                 Open a balance job
               </LinkButton>
             )}
+            <LinkButton href={routes.machineHistory(machine.id)}>Balance history</LinkButton>
             {may('register:edit') && (
               <LinkButton href={routes.machineEdit(machine.id)}>Edit</LinkButton>
             )}

@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import { shortCode } from '@/lib/domain/balance-job/record-code';
 import { routes } from '@/lib/routes';
-import { PrintButton } from './print-button';
+import { PrintButton } from '@/components/report/print-button';
 
 type TakeAwayProps = { jobId: number; contentHash: string | null };
 
