@@ -23,7 +23,8 @@ export async function signIn(page: Page, base: string, email: string, password: 
 export async function openJob(page: Page, address: string, kind: 'One plane' | 'Two planes') {
   await page.goto(`${address}/new-balance-job`);
   await page.getByLabel(/I looked: mark, tacho and sensors/).check();
-  await page.getByLabel(kind).check();
+  const named = kind === 'One plane' ? kind : 'Two planes the usual rotor';
+  await page.getByRole('radio', { name: named }).check();
   for (const plane of await page.getByLabel(/^Plane /).all()) await plane.check();
   const points = page.getByLabel(kind === 'One plane' ? /^A-H/ : /^[AB]-H/);
   for (const point of await points.all()) await point.check();
