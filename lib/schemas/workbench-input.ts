@@ -1,23 +1,6 @@
 import { z } from 'zod';
 import { optionalNumber, typedNumber } from './number';
-
-const choice = <const Options extends readonly [string, ...string[]]>(
-  options: Options,
-  message: string,
-) => z.enum(options, { error: message });
-
-// Degrees are checked by the arithmetic, which says what to do about −10 or 720.
-const degrees = (what: string) => typedNumber({ what, unit: '°' });
-
-const numbering = choice(
-  ['against', 'with'],
-  'Say which way degrees and positions are counted: against or with rotation.',
-);
-
-const rotation = choice(
-  ['clockwise', 'counter-clockwise'],
-  'Say which way the rotor turns, seen from the drive end.',
-);
+import { choice, degrees, numbering, rotation } from './workbench-parts';
 
 const reading = z.strictObject({
   amplitude: typedNumber({ what: 'the 1x size', min: 0, max: 1e6 }),

@@ -31,8 +31,8 @@ export function openApiDocument() {
 }
 
 function pathOf(name: keyof typeof COMPUTATIONS) {
-  const { compute, says } = COMPUTATIONS[name];
-  const schema = z.toJSONSchema(compute.schema, { io: 'input', unrepresentable: 'any' });
+  const { schema: input, says } = COMPUTATIONS[name];
+  const schema = z.toJSONSchema(input, { io: 'input', unrepresentable: 'any' });
   return {
     post: {
       operationId: name,

@@ -5,9 +5,14 @@ import { Tabs } from '@/components/ui/tabs';
 import { allows } from '@/lib/domain/access/permissions';
 import { routes } from '@/lib/routes';
 import { requireActor } from '@/lib/server/actor';
+import { CombineForm } from './combine-form';
+import { PiecesForm } from './pieces-form';
+import { SixPlacesForm } from './six-places-form';
 import { SolveForm } from './solve-form';
 import { SplitForm } from './split-form';
 import { ToleranceForm } from './tolerance-form';
+import { TrialWeightForm } from './trial-weight-form';
+import { WithoutPhaseForm } from './without-phase-form';
 import { toolFrom, TOOLS, type Tool } from './tools';
 
 export const metadata: Metadata = { title: 'Workbench' };
@@ -53,5 +58,15 @@ function formOf(tool: Tool, decimalMark: '.' | ',') {
       return <ToleranceForm decimalMark={decimalMark} />;
     case 'split':
       return <SplitForm decimalMark={decimalMark} />;
+    case 'trial-weight':
+      return <TrialWeightForm decimalMark={decimalMark} />;
+    case 'without-phase':
+      return <WithoutPhaseForm decimalMark={decimalMark} />;
+    case 'pieces':
+      return <PiecesForm decimalMark={decimalMark} />;
+    case 'combine':
+      return <CombineForm decimalMark={decimalMark} />;
+    case 'six-places':
+      return <SixPlacesForm decimalMark={decimalMark} />;
   }
 }

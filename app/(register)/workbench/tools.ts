@@ -3,6 +3,11 @@ export const TOOLS = [
   { key: 'two-planes', label: 'Two planes' },
   { key: 'tolerance', label: 'Tolerance' },
   { key: 'split', label: 'Split' },
+  { key: 'trial-weight', label: 'Trial weight' },
+  { key: 'without-phase', label: 'Without phase' },
+  { key: 'pieces', label: 'Pieces' },
+  { key: 'combine', label: 'Combine' },
+  { key: 'six-places', label: 'Six places' },
 ] as const;
 export type Tool = (typeof TOOLS)[number]['key'];
 

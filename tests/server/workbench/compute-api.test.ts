@@ -150,7 +150,10 @@ describe('the OpenAPI document', () => {
 
   it('has every computation, and demands every sense', () => {
     expect(document.openapi).toBe('3.1.0');
-    expect(Object.keys(document.paths)).toHaveLength(3);
+    expect(Object.keys(document.paths)).toHaveLength(9);
+    const angled = ['without-phase', 'pieces', 'combine', 'six-places'];
+    for (const name of angled) expect(schemaOf(name)?.required).toContain('angleSense');
+    expect(schemaOf('solve-rows')?.required).toContain('phaseSense');
     expect(schemaOf('solve-runs')?.required).toEqual(
       expect.arrayContaining(['phaseSense', 'angleSense', 'rotationFromDriveEnd', 'unit']),
     );
