@@ -4,6 +4,7 @@ import type { z } from 'zod';
 import type { Plane } from '@/entities/rotor';
 import { Weight } from '@/entities/weight';
 import { allows, type Role } from '@/lib/domain/access/permissions';
+import { centrifugalForceN, weightN } from '@/lib/domain/balancing/centrifugal-force';
 import { fail, ok, type Result } from '@/lib/domain/result';
 import { fitWeightInput } from '@/lib/schemas/balance-job-input';
 import { baseInZoneD } from '../balance-job/before-first-run';
@@ -18,6 +19,9 @@ import { notFound, visibleJob } from '../scope';
 
 type Input = z.output<typeof fitWeightInput>;
 
+/** Share of the static load from which a trial weight is asked about (practice). */
+const HEAVY_SHARE = 0.2;
+
 /** Writes a weight to the ledger the moment it is fitted, where it really hangs. */
 export const fitWeight = command(
   { name: 'fitWeight', permission: 'balanceJob:record', input: fitWeightInput },
@@ -28,14 +32,13 @@ export const fitWeight = command(
     const loaded = await loadJob(em, job);
     const refusal = outOfOrder(loaded, input);
     if (refusal) return refusal;
-    const unagreed = await needsConsent(em, loaded, input, actor.role);
-    if (unagreed) return unagreed;
     const place = await resolvePlace(em, input);
     if (!place.ok) return place;
     const { plane, position, angleDeg } = place.value;
     const full =
       recordedAgain(loaded, place.value, input) ??
-      (await roomFailure(em, plane, position, input.massG));
+      (await roomFailure(em, plane, position, input.massG)) ??
+      (await needsConsent(em, loaded, input, actor.role));
     if (full) return full;
     const fixing = await readFixing(input);
     if (!fixing.ok) return fixing;
@@ -82,14 +85,33 @@ export const fitWeight = command(
 async function needsConsent(
   em: EntityManager,
   loaded: LoadedJob,
-  { purpose, consent }: Input,
+  input: Input,
   role: Role,
 ): Promise<Result<never> | null> {
-  if (purpose !== 'trial' || consent !== '' || allows(role, 'balanceJob:override')) return null;
+  const { purpose, consent } = input;
+  if (purpose !== 'trial' || consent !== '') return null;
+  const heavy = heavyTrial(loaded, input);
+  if (heavy) return heavy;
+  if (allows(role, 'balanceJob:override')) return null;
   if (!baseInZoneD(loaded, await limitsOf(em, loaded.job.machine.id))) return null;
   return fail(
     'zone-d',
     'The base is in zone D, and a trial weight can raise it. Name the engineer who agrees; a lower speed or the coefficient book may do without it.',
+    'consent',
+  );
+}
+
+/** Twice the usual pull of a trial weight is more often a slip of the pen than a wish. */
+function heavyTrial({ job, planes }: LoadedJob, { massG, radiusMm }: Input): Result<never> | null {
+  const massKg = job.rotor.$.massKg;
+  if (!massKg) return null;
+  const speedRpm = job.machine.$.nominalSpeedRpm;
+  const loadN = weightN(massKg) / (planes.length > 1 ? 2 : 1);
+  const forceN = centrifugalForceN(massG * radiusMm, speedRpm);
+  if (forceN <= HEAVY_SHARE * loadN) return null;
+  return fail(
+    'trial-heavy',
+    `${massG} g at ${radiusMm} mm pull ${forceN.toFixed(0)} N at ${speedRpm} r/min, ${((100 * forceN) / loadN).toFixed(0)} % of the load they rest on; 10 % is usual for a trial. Weigh it again. If it is right, name the engineer who agrees.`,
     'consent',
   );
 }

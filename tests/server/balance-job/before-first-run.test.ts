@@ -137,3 +137,18 @@ it('in zone D a trial weight needs an engineer, or one who is named', async () =
     }),
   );
 });
+
+it('asks about a trial weight that pulls twice the usual before the start, not after', async () => {
+  const job = await open(await aMachine());
+  valueOf(await job.run('base', base));
+  await job.acceptBase('One base run.');
+  // 200 g at 700 mm and 990 r/min pull 1505 N; half of 640 kg weighs 3138 N: 48 %.
+  expect(await job.fit('trial', 0, { g: 200, radius_mm: 700, deg: 0 })).toMatchObject({
+    failure: {
+      code: 'trial-heavy',
+      field: 'consent',
+      message: expect.stringContaining('1505 N') as string,
+    },
+  });
+  valueOf(await job.fit('trial', 0, { g: 20, radius_mm: 700, deg: 0 }));
+});

@@ -3,6 +3,7 @@
 import { Caution } from '@/components/ui/caution';
 import { CheckField } from '@/components/ui/check-field';
 import { Field } from '@/components/ui/field';
+import { errorOf } from '@/components/ui/field-state';
 import { RadioField } from '@/components/ui/radio-field';
 import { CAUTIONS } from '@/lib/domain/cautions';
 import { formatDegrees, formatForInput, formatMass } from '@/lib/format';
@@ -68,10 +69,11 @@ export function WeightForm({ job, plane, purpose, proposedG }: WeightFormProps) 
             ]}
           />
           <PlaceFields plane={plane} state={state} />
-          {purpose === 'trial' && job.needsConsent && (
+          {purpose === 'trial' && (job.needsConsent || errorOf(state, 'consent')) && (
             <Field
               name="consent"
-              label="The base is in zone D: engineer who agrees to a trial weight (name)"
+              label="Engineer who agrees to this trial weight (name)"
+              hint={job.needsConsent ? 'The base is in zone D.' : undefined}
               state={state}
             />
           )}
