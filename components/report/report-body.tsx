@@ -58,8 +58,8 @@ function Block({ block }: { block: ReportBlock }) {
     case 'walks':
       return (
         <div className="grid gap-6 lg:grid-cols-2 print:grid-cols-2">
-          {block.walks.map(({ title, unit, counts, steps }) => (
-            <VectorWalk key={title} title={title} unit={unit} counts={counts} steps={steps} />
+          {block.walks.map((walk) => (
+            <VectorWalk key={walk.title} {...walk} />
           ))}
         </div>
       );

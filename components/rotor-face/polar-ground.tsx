@@ -1,14 +1,20 @@
 import { polarPlace, screenDeg, type Place, type Sense } from '@/lib/domain/drawing/face-view';
-import { formatNumber } from '@/lib/format';
+import { formatNumber, type DecimalMark } from '@/lib/format';
 import { HALO } from './face-layout';
 
-type PolarGroundProps = { centre: Place; radius: number; outer: number; counts: Sense };
+type PolarGroundProps = {
+  centre: Place;
+  radius: number;
+  outer: number;
+  counts: Sense;
+  decimalMark?: DecimalMark;
+};
 
 const RINGS = [1 / 3, 2 / 3, 1];
 const SPOKES = Array.from({ length: 12 }, (_, i) => i * 30);
 
 /** Rings of size and spokes of lag, the way of counting in words. */
-export function PolarGround({ centre, radius, outer, counts }: PolarGroundProps) {
+export function PolarGround({ centre, radius, outer, counts, decimalMark }: PolarGroundProps) {
   const turning = counts === 'cw' ? 'ccw' : 'cw';
   return (
     <g>
@@ -45,7 +51,7 @@ export function PolarGround({ centre, radius, outer, counts }: PolarGroundProps)
             className="figures fill-ink-soft text-[12px]"
             {...HALO}
           >
-            {formatNumber(outer * share, { significant: 2 })}
+            {formatNumber(outer * share, { significant: 2, decimalMark })}
           </text>
         </g>
       ))}

@@ -1,7 +1,8 @@
+import type { ReactNode } from 'react';
 import { polarPlace, screenDeg, type Sense } from '@/lib/domain/drawing/face-view';
 import { spreadApart } from '@/lib/domain/drawing/leader-rows';
 import { outerCircle } from '@/lib/domain/drawing/outer-circle';
-import { formatLag, formatNumber, formatQuantity } from '@/lib/format';
+import { formatLag, formatNumber, formatQuantity, type DecimalMark } from '@/lib/format';
 import { Table, Td, Th, RowHead } from '@/components/ui/table';
 import { HALO } from './face-layout';
 import { PolarGround } from './polar-ground';
@@ -16,6 +17,8 @@ type VectorWalkProps = {
   steps: readonly WalkStep[];
   /** Way in which lag counts on the drawing; written on it. */
   counts?: Sense;
+  /** Of the site; a point where left out. */
+  decimalMark?: DecimalMark;
 };
 
 const CENTRE = { x: 160, y: 158 };
@@ -23,7 +26,7 @@ const RADIUS = 120;
 const MOST_WORDS = 6;
 
 /** The 1x vector's path over runs or dates, in a polar plot with its numbers as a table. */
-export function VectorWalk({ title, unit, steps, counts = 'cw' }: VectorWalkProps) {
+export function VectorWalk({ title, unit, steps, counts = 'cw', decimalMark }: VectorWalkProps) {
   const outer = outerCircle(Math.max(0, ...steps.map(({ amplitude }) => amplitude)));
   const turning = counts === 'cw' ? 'ccw' : 'cw';
   const places = steps.map((step) => ({
@@ -49,7 +52,13 @@ export function VectorWalk({ title, unit, steps, counts = 'cw' }: VectorWalkProp
         aria-label={`${title}: ${steps.length} vectors, in the table that follows`}
         className="mx-auto mt-2 block w-full max-w-[26rem]"
       >
-        <PolarGround centre={CENTRE} radius={RADIUS} outer={outer} counts={counts} />
+        <PolarGround
+          centre={CENTRE}
+          radius={RADIUS}
+          outer={outer}
+          counts={counts}
+          decimalMark={decimalMark}
+        />
         <polyline
           points={places.map(({ x, y }) => `${x},${y}`).join(' ')}
           fill="none"
@@ -66,24 +75,32 @@ export function VectorWalk({ title, unit, steps, counts = 'cw' }: VectorWalkProp
           />
         ))}
         {worded.map(({ step, x }, i) => (
-          <text
-            key={step.id}
-            x={x + (x > CENTRE.x ? -8 : 8)}
-            y={(heights[i] ?? 0) + 4}
-            textAnchor={x > CENTRE.x ? 'end' : 'start'}
-            className="fill-ink text-[12px] font-semibold"
-            {...HALO}
-          >
-            {step.label} {formatNumber(step.amplitude)}
-          </text>
+          <StepWords key={step.id} x={x} y={heights[i] ?? 0}>
+            {step.label} {formatNumber(step.amplitude, { decimalMark })}
+          </StepWords>
         ))}
       </svg>
-      <WalkTable title={title} unit={unit} steps={steps} />
+      <WalkTable title={title} unit={unit} steps={steps} decimalMark={decimalMark} />
     </figure>
   );
 }
 
-function WalkTable({ title, unit, steps }: Omit<VectorWalkProps, 'counts'>) {
+/** Words beside a tip, towards the middle of the plot. */
+function StepWords({ x, y, children }: { x: number; y: number; children: ReactNode }) {
+  return (
+    <text
+      x={x + (x > CENTRE.x ? -8 : 8)}
+      y={y + 4}
+      textAnchor={x > CENTRE.x ? 'end' : 'start'}
+      className="fill-ink text-[12px] font-semibold"
+      {...HALO}
+    >
+      {children}
+    </text>
+  );
+}
+
+function WalkTable({ title, unit, steps, decimalMark }: Omit<VectorWalkProps, 'counts'>) {
   return (
     <details className="mt-2">
       <summary className="cursor-pointer py-1 text-sm text-blue">Numbers</summary>
@@ -99,7 +116,7 @@ function WalkTable({ title, unit, steps }: Omit<VectorWalkProps, 'counts'>) {
           {steps.map((step) => (
             <tr key={step.id}>
               <RowHead>{step.label}</RowHead>
-              <Td numeric>{formatQuantity(step.amplitude, '')}</Td>
+              <Td numeric>{formatQuantity(step.amplitude, '', { decimalMark })}</Td>
               <Td numeric>{formatLag(step.lagDeg)}</Td>
             </tr>
           ))}

@@ -50,7 +50,13 @@ export type ReportStep = {
 };
 
 /** The 1x vector of one point from the first run to the last. */
-export type ReportWalk = { title: string; unit: string; counts: Sense; steps: ReportStep[] };
+export type ReportWalk = {
+  title: string;
+  unit: string;
+  counts: Sense;
+  decimalMark: DecimalMark;
+  steps: ReportStep[];
+};
 
 export type ReportBlock =
   | ReportTable

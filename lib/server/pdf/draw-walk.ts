@@ -24,7 +24,7 @@ export function writeWalk(doc: Doc, walk: ReportWalk): void {
   const outer = outerCircle(Math.max(0, ...steps.map(({ amplitude }) => amplitude)));
   doc.strokeColor('black').fillColor('black').undash();
   drawWords(doc, `${title}, ${unit}`, { x: 0, y: 14, size: 11, bold: true });
-  drawGround(doc, outer, counts);
+  drawGround(doc, outer, walk);
   const places = steps.map((step) =>
     polarPlace(CENTRE, (step.amplitude / outer) * RADIUS, screenDeg(step.lagDeg, opposite(counts))),
   );
@@ -37,7 +37,7 @@ export function writeWalk(doc: Doc, walk: ReportWalk): void {
   drawKey(doc, walk);
 }
 
-function drawGround(doc: Doc, outer: number, counts: 'cw' | 'ccw'): void {
+function drawGround(doc: Doc, outer: number, { counts, decimalMark }: ReportWalk): void {
   for (let lag = 0; lag < 360; lag += 30) {
     const at = screenDeg(lag, opposite(counts));
     const end = polarPlace(CENTRE, RADIUS, at);
@@ -50,7 +50,7 @@ function drawGround(doc: Doc, outer: number, counts: 'cw' | 'ccw'): void {
       .circle(CENTRE.x, CENTRE.y, RADIUS * share)
       .lineWidth(share === 1 ? 0.8 : 0.3)
       .stroke('#777777');
-    const words = formatNumber(outer * share, { significant: 2 });
+    const words = formatNumber(outer * share, { significant: 2, decimalMark });
     drawWords(doc, words, {
       x: CENTRE.x,
       y: CENTRE.y + RADIUS * share - 3,
@@ -109,11 +109,11 @@ function drawLabels(doc: Doc, steps: readonly ReportStep[], places: readonly Pla
   });
 }
 
-function drawKey(doc: Doc, { counts, steps }: ReportWalk): void {
+function drawKey(doc: Doc, { counts, steps, decimalMark }: ReportWalk): void {
   const way = counts === 'cw' ? 'clockwise' : 'counter-clockwise';
   const [first, last] = [steps[0], steps.at(-1)];
   const said = (step: ReportStep) =>
-    `${step.label} ${formatNumber(step.amplitude)} at ${formatLag(step.lagDeg)}`;
+    `${step.label} ${formatNumber(step.amplitude, { decimalMark })} at ${formatLag(step.lagDeg)}`;
   drawWords(doc, `degrees of lag, counted ${way} from the top`, { x: 0, y: 328, size: 9.5 });
   if (first && last) drawWords(doc, `${said(first)} to ${said(last)}`, { x: 0, y: 342, size: 9.5 });
   const keys = [

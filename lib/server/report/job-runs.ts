@@ -134,6 +134,7 @@ export function vectorsSection(job: BalanceJobDto): ReportSection {
       title: `1x at ${label}, bearing ${bearing} ${direction}`,
       unit: job.unit,
       counts,
+      decimalMark: job.site.decimalMark,
       steps: stepsAt(job, id),
     }))
     .filter(({ steps }) => steps.length > 0);

@@ -1,6 +1,6 @@
 import 'server-only';
 import { CAUTIONS } from '@/lib/domain/cautions';
-import { formatDateTime } from '@/lib/format';
+import { formatDateTime, formatMass } from '@/lib/format';
 import type { BalanceJobDto } from '@/lib/schemas/balance-job';
 import type { AddendumDto, CautionLine, SignedState } from '@/lib/schemas/job-record';
 import type { ReportSection } from '@/lib/schemas/report';
@@ -8,7 +8,7 @@ import { plain, quiet, strong, table, words } from './blocks';
 
 /** Which cautions were ticked, at which step, by whom, and their words. */
 export function cautionsSection(
-  { site }: BalanceJobDto,
+  job: BalanceJobDto,
   cautions: readonly CautionLine[],
 ): ReportSection {
   const shown = [...new Set(cautions.map(({ cautionId }) => cautionId))].sort();
@@ -25,17 +25,25 @@ export function cautionsSection(
           words('time'),
         ],
         byStep(cautions).map((line) => [
-          line.step,
+          stepWords(job, line.step),
           line.cautionIds.join(', '),
           line.namedPerson ?? 'not asked',
           line.person,
-          formatDateTime(line.at, site.timeZone),
+          formatDateTime(line.at, job.site.timeZone),
         ]),
         'No caution was confirmed yet.',
       ),
       table('Their words', [words('caution'), words('text')], shown.flatMap(wordsOf)),
     ],
   };
+}
+
+/** A step of a weight names it by mass and plane: nobody knows its number in the ledger. */
+function stepWords({ weights, site }: BalanceJobDto, step: string): string {
+  return step.replace(/weight (\d+)$/, (said, id: string) => {
+    const weight = weights.find((candidate) => candidate.id === Number(id));
+    return weight ? `${formatMass(weight.massG, site.decimalMark)} in ${weight.planeName}` : said;
+  });
 }
 
 const WORDS: Readonly<Record<string, { text: string }>> = CAUTIONS;

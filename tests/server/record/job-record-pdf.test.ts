@@ -54,6 +54,7 @@ describe('the PDF of a signed job', () => {
     ['mark', 'Punch mark on the hub'],
     ['rotation', 'clockwise'],
     ['a caution', 'SAF-01, SAF-03, SAF-06'],
+    ['which weight it was for', 'fit 90.0 g in L'],
     ['who was named', 'Ida Berg'],
     ['signature', 'technician home technician'],
     ['statement', 'Done as recorded.'],
