@@ -87,8 +87,8 @@ describe('S01: one plane, three base runs, the trial taken off, one trim', () =>
     await typeRun(page, 'Record check run', [inputs.check_run_2], inputs.check_run_2.speed);
     await signJob(page, 'Small remaining miss.');
     await page.goto(`${page.url()}/record`);
-    // Small in the ledger and large among the photos, of the frozen record.
-    expect(await page.getByAltText(/^Photo of 26\.0/).count()).toBe(2);
+    // Large among the photos of the frozen record.
+    expect(await page.getByAltText(/^Photo of 26\.0/).count()).toBe(1);
     await expectAccessible(page);
     await page.goto(address);
     const sheet = await textOf(page);
