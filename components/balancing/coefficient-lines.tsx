@@ -2,7 +2,11 @@ import { RowHead, Table, Td, Th } from '@/components/ui/table';
 import { formatDegrees, formatNumber, formatQuantity } from '@/lib/format';
 import type { BookCoefficientDto } from '@/lib/schemas/balance-job-parts';
 
-type Line = BookCoefficientDto & { count?: number; spreadPct?: number | null };
+type Line = BookCoefficientDto & {
+  count?: number;
+  spreadPct?: number | null;
+  converted?: boolean;
+};
 type CoefficientLinesProps = { lines: readonly Line[]; unit: string };
 
 /** Influence coefficients by plane and point, with how well their estimates agree where that is known. */
@@ -21,12 +25,15 @@ export function CoefficientLines({ lines, unit }: CoefficientLinesProps) {
         </tr>
       </thead>
       <tbody>
-        {lines.map(({ planeName, pointLabel, sizePerKgMm, deg, count, spreadPct }) => (
+        {lines.map(({ planeName, pointLabel, sizePerKgMm, deg, count, spreadPct, converted }) => (
           <tr key={`${planeName} ${pointLabel}`}>
             <RowHead>{planeName}</RowHead>
             <Td>{pointLabel}</Td>
             <Td numeric>{formatNumber(sizePerKgMm, { decimals: 3 })}</Td>
-            <Td numeric>{formatDegrees(deg, 1)}</Td>
+            <Td numeric>
+              {formatDegrees(deg, 1)}
+              {converted === true && ', converted'}
+            </Td>
             {graded && <Td numeric>{count}</Td>}
             {graded && <Td numeric>{spreadWords(spreadPct)}</Td>}
           </tr>

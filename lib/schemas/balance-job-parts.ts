@@ -13,7 +13,11 @@ export type BookOfferDto =
       failure: null;
       grade: 'good' | 'with care';
       speedRpm: number;
-      lines: (BookCoefficientDto & { count: number; spreadPct: number | null })[];
+      lines: (BookCoefficientDto & {
+        count: number;
+        spreadPct: number | null;
+        converted: boolean;
+      })[];
     };
 
 /** Coefficients of the book that this job uses, as they were when a person took them. */

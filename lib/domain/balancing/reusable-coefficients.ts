@@ -12,6 +12,8 @@ export type BookEstimate = {
   readonly imPerGmm: number;
   /** The fit over all runs of a job counts instead of its trials. */
   readonly source: 'trial' | 'fitted weight' | 'fit over all runs';
+  /** Measured under another set-up and converted: its grade is one step lower. */
+  readonly converted?: boolean;
 };
 
 /** What the book offers for one plane and point. */
@@ -20,6 +22,7 @@ export type ReusableCoefficient = StoredCoefficient & {
   readonly spreadPct: number | null;
   readonly grade: CoefficientGrade;
   readonly jobIds: readonly number[];
+  readonly converted: boolean;
 };
 
 /** Coefficients for every plane and point of a job, without a trial run. */
@@ -67,10 +70,14 @@ export function reusableCoefficients(
   const coefficients: ReusableCoefficient[] = [];
   for (const plane of of.planes)
     for (const point of of.points) {
-      const own = chosen.filter((e) => e.planeId === plane.id && e.pointId === point.id);
+      const own = preferMeasured(
+        chosen.filter((e) => e.planeId === plane.id && e.pointId === point.id),
+      );
       const entry = summariseCoefficient(own.map((e) => ({ re: e.rePerGmm, im: e.imPerGmm })));
       if (!entry) return gapFailure(plane, point);
-      const { rePerGmm, imPerGmm, spreadPerGmm, spreadPct, grade, count } = entry;
+      const { rePerGmm, imPerGmm, spreadPerGmm, spreadPct, count } = entry;
+      const converted = own.some((e) => e.converted === true);
+      const grade = converted ? lowered(entry.grade) : entry.grade;
       const jobIds = own.map(({ jobId }) => jobId);
       const ids = { planeId: plane.id, pointId: point.id };
       coefficients.push({
@@ -82,16 +89,39 @@ export function reusableCoefficients(
         grade,
         count,
         jobIds,
+        converted,
       });
     }
   const grade = WORST.find((worst) => coefficients.some((c) => c.grade === worst)) ?? 'with care';
-  if (grade === 'not for reuse') return spreadFailure(coefficients, of);
+  if (grade === 'not for reuse')
+    return unconfirmed(coefficients) ?? spreadFailure(coefficients, of);
   const used = chosen.map(({ speedRpm }) => speedRpm);
   return ok({
     coefficients,
     grade,
     speedRpm: used.reduce((total, speed) => total + speed, 0) / used.length,
   });
+}
+
+/** What was measured under this set-up goes before what was converted to it. */
+function preferMeasured(estimates: readonly BookEstimate[]): readonly BookEstimate[] {
+  const measured = estimates.filter(({ converted }) => converted !== true);
+  return measured.length > 0 ? measured : estimates;
+}
+
+/** Estimates that agree well enough, and are not for reuse only because they were converted. */
+function unconfirmed(coefficients: readonly ReusableCoefficient[]): Result<never> | null {
+  const doubtful = coefficients.filter(({ grade }) => grade === 'not for reuse');
+  if (doubtful.some(({ spreadPct, converted }) => !converted || (spreadPct ?? 0) > 20)) return null;
+  return fail(
+    'converted-only',
+    'The estimates were measured with the tacho or a sensor set otherwise. Converted they count one grade less, which is not enough here: make the trial runs once under this set-up.',
+  );
+}
+
+/** Until a check run confirms it, a converted coefficient counts one grade less. */
+function lowered(grade: CoefficientGrade): CoefficientGrade {
+  return grade === 'good' ? 'with care' : 'not for reuse';
 }
 
 function onePerJob(estimates: readonly BookEstimate[]): BookEstimate[] {

@@ -54,6 +54,7 @@ function offerDto(loaded: LoadedJob, offer: Result<ReusableBook>): BookOfferDto 
       ...lineOf(loaded, c),
       count: c.count,
       spreadPct: c.spreadPct,
+      converted: c.converted,
     })),
   };
 }

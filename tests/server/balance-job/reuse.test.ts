@@ -4,6 +4,7 @@ import { Coefficient } from '@/entities/answer';
 import { LimitSet } from '@/entities/limit-set';
 import { Machine } from '@/entities/machine';
 import { Rotor } from '@/entities/rotor';
+import { Setup } from '@/entities/setup';
 import { Site } from '@/entities/site';
 import { add, angleDeg, fromPolar, size } from '@/lib/domain/complex';
 import { reuseCoefficients, withdrawReuse } from '@/lib/server/commands/reuse-coefficients';
@@ -189,6 +190,38 @@ describe('the coefficient book', () => {
     expect(step.step).toBe('decide');
     // The rotor's own answer: with base, fitted weight and check run known, the trim leaves nothing.
     expect(answer?.predicted[0]?.amplitude).toBeLessThan(1e-9);
+  });
+
+  it('measured before the tacho was moved is converted, and counts one grade less', async () => {
+    const fan = await rawMillFan();
+    for (const one of past) await pastJob(fan, one);
+    const before = await em.findOneOrFail(Setup, { machine: fan.machineId, validTo: null });
+    const now = new Date();
+    const { machine, markDescription, rotationFromDriveEnd, sensorPlaces, person } = before;
+    em.assign(before, { validTo: now });
+    await em.flush();
+    em.create(Setup, {
+      ...{ machine, markDescription, rotationFromDriveEnd, sensorPlaces, person },
+      number: before.number + 1,
+      tachoDeg: before.tachoDeg + 30,
+      reason: 'The bracket was in the way.',
+      validFrom: now,
+    });
+    await em.flush();
+    // The same unbalance is read 30° earlier now.
+    const base = { ...S05.inputs.base, deg: S05.inputs.base.deg - 30 };
+    const job = await jobWithBase(fan, base);
+    const { book } = await job.sheet();
+    if (!book || book.failure !== null) throw new Error('no book');
+    expect(book).toMatchObject({ grade: 'with care', lines: [{ converted: true, count: 3 }] });
+    const { jobId } = job;
+    const technician = plant.at('technician');
+    valueOf(await reuseCoefficients(technician, { jobId, ...ticks, reason: 'Only the tacho.' }));
+    const answer = await job.accept();
+    // The correction hangs where it hung: angles count from the mark, not from the tacho.
+    expect(answer.planes[0]?.angleDeg).toBeCloseTo(S05.expected.correction.deg, 0);
+    const other = await open(await rawMillFan());
+    expect((await other.sheet()).book).toBeNull();
   });
 
   it('checks a new trial at once: S07’s trial answers like its mirror image', async () => {
