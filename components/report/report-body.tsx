@@ -4,6 +4,7 @@ import { Fact, Facts } from '@/components/ui/fact';
 import { Panel } from '@/components/ui/panel';
 import type { Report, ReportBlock } from '@/lib/schemas/report';
 import { PrintMarks } from './print-marks';
+import { ReportPhotos } from './report-photos';
 import { ReportTableView } from './report-table';
 
 /** A report on the screen and in print; the PDF is made of the same report. */
@@ -55,6 +56,8 @@ function Block({ block }: { block: ReportBlock }) {
           ))}
         </div>
       );
+    case 'photos':
+      return <ReportPhotos photos={block.photos} />;
     case 'walks':
       return (
         <div className="grid gap-6 lg:grid-cols-2 print:grid-cols-2">

@@ -58,12 +58,22 @@ export type ReportWalk = {
   steps: ReportStep[];
 };
 
+/** A photo that was kept with the job; the hash tells that it is still the same picture. */
+export type ReportPhoto = {
+  id: number;
+  widthPx: number;
+  heightPx: number;
+  caption: string;
+  sha256: string;
+};
+
 export type ReportBlock =
   | ReportTable
   | { kind: 'facts'; facts: ReportFact[] }
   | { kind: 'text'; text: string; look: 'plain' | 'quiet' | 'strong' }
   | { kind: 'faces'; faces: ReportFace[] }
-  | { kind: 'walks'; walks: ReportWalk[] };
+  | { kind: 'walks'; walks: ReportWalk[] }
+  | { kind: 'photos'; photos: ReportPhoto[] };
 
 export type ReportSection = { title: string; note?: string; blocks: ReportBlock[] };
 

@@ -1,6 +1,6 @@
-import { getDocument } from 'pdfjs-dist/legacy/build/pdf.mjs';
+import { getDocument, OPS } from 'pdfjs-dist/legacy/build/pdf.mjs';
 
-export type ReadPage = { text: string; widthPt: number; heightPt: number };
+export type ReadPage = { text: string; images: number; widthPt: number; heightPt: number };
 
 /** The pages of a PDF as a reader that is not ours sees them: their words in order, and their size. */
 export async function readPdf(bytes: Uint8Array): Promise<ReadPage[]> {
@@ -10,8 +10,10 @@ export async function readPdf(bytes: Uint8Array): Promise<ReadPage[]> {
     const page = await file.getPage(number);
     const { items } = await page.getTextContent();
     const words = items.map((item) => ('str' in item ? item.str : ''));
+    const { fnArray } = await page.getOperatorList();
+    const images = fnArray.filter((drawn) => drawn === OPS.paintImageXObject).length;
     const [, , widthPt = 0, heightPt = 0] = page.view;
-    pages.push({ text: plainText(words.join(' ')), widthPt, heightPt });
+    pages.push({ text: plainText(words.join(' ')), images, widthPt, heightPt });
   }
   await file.destroy();
   return pages;

@@ -1,7 +1,8 @@
 import 'server-only';
-import type { Report, ReportBlock, ReportSection } from '@/lib/schemas/report';
+import type { Report, ReportBlock, ReportPhoto, ReportSection } from '@/lib/schemas/report';
 import { faceSize, writeFace } from './draw-face';
 import { walkSize, writeWalk } from './draw-walk';
+import { photoSize, writePhoto, type LoadedPhoto } from './draw-photo';
 import { writePageMarks } from './page-marks';
 import type { Paper } from './paper';
 import { finish, keepTogether, newSheet, SIZES, type Sheet } from './sheet';
@@ -9,25 +10,35 @@ import { figureRowHeight, writeFigures } from './write-figures';
 import { factsStartHeight, writeFacts } from './write-facts';
 import { tableStartHeight, writeTable } from './write-table';
 
+/** Bytes of the photos by their id. */
+export type Pictures = ReadonlyMap<number, Buffer>;
+
+type Writing = { sheet: Sheet; pictures: Pictures };
+
 /** A report as a PDF on the given paper: the same model as the screen, in black and white. */
-export async function reportPdf(report: Report, paper: Paper): Promise<Buffer> {
+export async function reportPdf(
+  report: Report,
+  paper: Paper,
+  pictures: Pictures = new Map(),
+): Promise<Buffer> {
   const sheet = newSheet(paper, { title: report.title, subject: report.about });
   const { doc, left, width } = sheet;
   doc.font('bold').fontSize(SIZES.title).text(report.title, left, doc.y, { width });
   doc.font('plain').fontSize(SIZES.text).text(report.revision, { width });
   doc.y += 6;
-  for (const section of report.sections) writeSection(sheet, section);
+  for (const section of report.sections) writeSection({ sheet, pictures }, section);
   writePageMarks(sheet, report);
   return finish(sheet);
 }
 
 const HEADING = 30;
 
-function writeSection(sheet: Sheet, section: ReportSection): void {
+function writeSection(writing: Writing, section: ReportSection): void {
+  const { sheet } = writing;
   const [first] = section.blocks;
   keepTogether(sheet, HEADING + (first ? startHeight(sheet, first) : 0));
   writeHeading(sheet, section);
-  for (const block of section.blocks) writeBlock(sheet, block);
+  for (const block of section.blocks) writeBlock(writing, block);
 }
 
 /** The title, and what is noted to it on the same line where it fits, otherwise under it. */
@@ -47,7 +58,7 @@ function writeHeading({ doc, left, width }: Sheet, { title, note }: ReportSectio
   doc.y += 4;
 }
 
-function writeBlock(sheet: Sheet, block: ReportBlock): void {
+function writeBlock({ sheet, pictures }: Writing, block: ReportBlock): void {
   switch (block.kind) {
     case 'table':
       return writeTable(sheet, block);
@@ -57,9 +68,18 @@ function writeBlock(sheet: Sheet, block: ReportBlock): void {
       return writeText(sheet, block);
     case 'faces':
       return writeFigures(sheet, block.faces, { size: faceSize, write: writeFace });
+    case 'photos':
+      return writeFigures(sheet, loaded(block.photos, pictures), {
+        size: photoSize,
+        write: writePhoto,
+      });
     case 'walks':
       return writeFigures(sheet, block.walks, { size: walkSize, write: writeWalk });
   }
+}
+
+function loaded(photos: readonly ReportPhoto[], pictures: Pictures): LoadedPhoto[] {
+  return photos.map((photo) => ({ photo, bytes: pictures.get(photo.id) ?? null }));
 }
 
 type TextBlock = Extract<ReportBlock, { kind: 'text' }>;
@@ -94,6 +114,8 @@ function startHeight(sheet: Sheet, block: ReportBlock): number {
       return Math.min(60, textHeight(sheet, block));
     case 'faces':
       return figureRowHeight(sheet, block.faces, faceSize);
+    case 'photos':
+      return figureRowHeight(sheet, loaded(block.photos, new Map()), photoSize);
     case 'walks':
       return figureRowHeight(sheet, block.walks, walkSize);
   }

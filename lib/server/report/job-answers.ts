@@ -79,6 +79,7 @@ export function coefficientsSection(job: BalanceJobDto): ReportSection {
         ]),
         'None: no answer was accepted.',
       ),
+      ...reused(job),
       ...(answer
         ? [
             quiet(
@@ -88,6 +89,17 @@ export function coefficientsSection(job: BalanceJobDto): ReportSection {
         : []),
     ],
   };
+}
+
+/** Whose judgement it was to take coefficients of the book instead of trial runs. */
+function reused({ reuse, site }: BalanceJobDto): ReportBlock[] {
+  if (!reuse) return [];
+  const reason = reuse.reason ? ` Reason: ${reuse.reason}` : '';
+  return [
+    plain(
+      `Taken from the coefficient book (${reuse.grade}) by ${reuse.person}, ${formatDateTime(reuse.at, site.timeZone)}. Confirmed: ${reuse.confirmed.join('; ')}.${reason}`,
+    ),
+  ];
 }
 
 /** Residual unbalance against ISO 21940-11, as an estimate in place. */

@@ -55,7 +55,9 @@ function targetsOf({ targets, unit, rotor, site }: BalanceJobDto): string {
 }
 
 function startsOf({ runs, startsAllowed }: BalanceJobDto): string {
-  return startsAllowed === null ? `${runs.length} used` : `${runs.length} used of ${startsAllowed}`;
+  // A run that corrects another was no start of the machine.
+  const used = runs.filter(({ corrects }) => !corrects).length;
+  return startsAllowed === null ? `${used} used` : `${used} used of ${startsAllowed}`;
 }
 
 /** Mark, tacho, rotation, senses; what it was measured with. */
@@ -72,6 +74,7 @@ export function setupSection(job: BalanceJobDto, equipment: EquipmentDto): Repor
         ['typed as', `phase ${job.phaseSense}, degrees ${job.angleSense} rotation`],
         ['1x read in', job.unit],
         ['speed of the runs', speedsOf(job)],
+        ['rotor cleaned before', job.cleaned ? CLEANED[job.cleaned] : null],
         ['readings', readingsFrom(job)],
         ['instrument', 'not recorded with the job'],
         ['support', equipment.supportNote],
@@ -83,6 +86,8 @@ export function setupSection(job: BalanceJobDto, equipment: EquipmentDto): Repor
     ],
   };
 }
+
+const CLEANED = { yes: 'yes', no: 'no', 'cannot be': 'it cannot be' } as const;
 
 function tachoOf({ setup }: BalanceJobDto, { pulsesPerTurn }: EquipmentDto): string {
   const pulses = pulsesPerTurn === 1 ? 'one pulse a turn' : `${pulsesPerTurn} pulses a turn`;

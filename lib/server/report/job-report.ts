@@ -8,7 +8,7 @@ import { answersSection, coefficientsSection, toleranceSection } from './job-ans
 import { machineSection, setupSection } from './job-head';
 import { beforeAfterSection, runsSection, vectorsSection } from './job-runs';
 import { addendaSection, cautionsSection, signOffSection } from './job-signing';
-import { onRotorSection, weightsSection } from './job-weights';
+import { onRotorSection, photosSection, weightsSection } from './job-weights';
 
 export type JobReportGround = {
   job: BalanceJobDto;
@@ -38,6 +38,7 @@ export function jobReport({ job, equipment, cautions, signed, asked }: JobReport
       runsSection(job),
       weightsSection(job),
       onRotorSection(job, signed !== null),
+      photosSection(job),
       answersSection(job),
       coefficientsSection(job),
       toleranceSection(job),

@@ -185,9 +185,10 @@ function runRow(job: BalanceJobDto, run: RunDto): ReportRow {
     return vector ? `${number(job, vector.amplitude)} at ${formatLag(vector.lagDeg)}` : '';
   });
   const why = run.stateReason ? `. ${run.state}: ${run.stateReason}` : '';
+  const corrects = run.corrects ? `, corrects run ${run.corrects}` : '';
   return {
     cells: [
-      `${run.number} ${run.purpose}${run.state === 'kept' ? '' : `, ${run.state}`}`,
+      `${run.number} ${run.purpose}${corrects}${run.state === 'kept' ? '' : `, ${run.state}`}`,
       formatDateTime(run.takenAt, job.site.timeZone),
       number(job, run.speedRpm),
       ...readings,

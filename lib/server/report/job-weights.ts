@@ -9,7 +9,7 @@ import {
 } from '@/lib/format';
 import type { BalanceJobDto, LedgerWeightDto, PlaneDto } from '@/lib/schemas/balance-job';
 import type { ReportBlock, ReportCell, ReportFace, ReportSection } from '@/lib/schemas/report';
-import { figures, plain, strong, table, words } from './blocks';
+import { figures, plain, quiet, strong, table, words } from './blocks';
 
 /** What was hung on in this job and what hung there before it. */
 export function weightsSection(job: BalanceJobDto): ReportSection {
@@ -48,10 +48,16 @@ function weightCells(job: BalanceJobDto, weight: LedgerWeightDto): ReportCell[] 
     formatMass(weight.massG, decimalMark),
     `${formatRotorAngle(weight.angleDeg)}${label}${typed}`,
     formatQuantity(weight.radiusMm, 'mm', { decimalMark }),
-    `${weight.purpose}, ${weighed}, ${weight.fixing}`,
+    `${weight.purpose}, ${weighed}, ${fixingOf(weight)}`,
     `${formatDateTime(weight.fittedAt, timeZone)}, ${weight.fittedBy}`,
     nowOf(job, weight),
   ];
+}
+
+function fixingOf({ fixing, fixedBy }: LedgerWeightDto): string {
+  if (!fixedBy || fixedBy.kind === 'temporary') return fixing;
+  const held = fixedBy.secured === null ? '' : fixedBy.secured ? ', secured' : ', not secured';
+  return `${fixedBy.kind}, ${fixing}${held}`;
 }
 
 function nowOf({ site }: BalanceJobDto, weight: LedgerWeightDto): string {
@@ -133,4 +139,35 @@ function faceOf(job: BalanceJobDto, plane: PlaneDto): ReportFace {
       state: weight.purpose === 'trial' && weight.stays !== true ? 'trial' : 'on',
     })),
   };
+}
+
+/** The photos of the job's weights, or why there is none. */
+export function photosSection(job: BalanceJobDto): ReportSection {
+  const photos = job.weights.flatMap((weight) =>
+    (weight.photos ?? []).map(({ id, widthPx, heightPx, person, at, sha256 }) => ({
+      id,
+      widthPx,
+      heightPx,
+      sha256,
+      caption: `${placeWords(job, weight)}. ${person}, ${formatDateTime(at, job.site.timeZone)}`,
+    })),
+  );
+  const missing = job.weights.flatMap((weight) => {
+    const why = weight.fixedBy?.noPhotoReason;
+    return why ? [plain(`No photo of ${placeWords(job, weight)}: ${why}`)] : [];
+  });
+  const none = photos.length + missing.length === 0 ? [quiet('None was kept.')] : [];
+  return {
+    title: 'Photos of the weights',
+    blocks: [
+      ...(photos.length > 0 ? [{ kind: 'photos' as const, photos }] : []),
+      ...missing,
+      ...none,
+    ],
+  };
+}
+
+function placeWords({ site }: BalanceJobDto, weight: LedgerWeightDto): string {
+  const position = weight.positionLabel === null ? '' : `, position ${weight.positionLabel}`;
+  return `${formatMass(weight.massG, site.decimalMark)} in plane ${weight.planeName} at ${formatRotorAngle(weight.angleDeg)}${position}`;
 }

@@ -10,7 +10,6 @@ import { requireActor } from '@/lib/server/actor';
 import { idOf } from '@/lib/server/address-numbers';
 import { jobRecord } from '@/lib/server/queries/job-record';
 import { AfterSigning } from './after-signing';
-import { PhotosPanel } from './photos-panel';
 import { TakeAway } from './take-away';
 
 type Props = { params: Promise<{ jobId: string }> };
@@ -56,7 +55,6 @@ export default async function JobRecordPage({ params }: Props) {
       )}
       {!signed && <Notice kind="info">Not signed: this record still follows the job.</Notice>}
       <ReportBody report={report} />
-      <PhotosPanel job={job} />
       {signed && <AfterSigning jobId={job.id} may={may} />}
     </>
   );

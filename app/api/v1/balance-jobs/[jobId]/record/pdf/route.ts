@@ -7,5 +7,6 @@ export const GET = handler(async (actor, { jobId }: { jobId: string }, request) 
   const record = await jobRecord(actor, idOf(jobId));
   if (!record) return null;
   const { machine, number } = record.job;
-  return pdfResponse(record.report, request, `job-record-${machine.tag}-${number}.pdf`);
+  const name = `job-record-${machine.tag}-${number}.pdf`;
+  return pdfResponse(actor, record.report, { request, name });
 });

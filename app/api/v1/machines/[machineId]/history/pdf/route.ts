@@ -6,5 +6,6 @@ import { handler } from '@/lib/server/route-handler';
 export const GET = handler(async (actor, { machineId }: { machineId: string }, request) => {
   const history = await machineHistory(actor, idOf(machineId));
   if (!history) return null;
-  return pdfResponse(history.report, request, `balance-history-${history.machine.tag}.pdf`);
+  const name = `balance-history-${history.machine.tag}.pdf`;
+  return pdfResponse(actor, history.report, { request, name });
 });
