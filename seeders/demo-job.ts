@@ -203,7 +203,7 @@ export class DemoJob {
     );
   }
 
-  /** A mass that changes the reading beside its plane by some 80 %. */
+  /** A mass that changes the reading beside its plane by some 60 %. */
   private trialMassG(plane: number): number {
     const { model, spec } = this.machine;
     const moment = { day: this.plan.day, speedRpm: spec.speedRpm };
@@ -215,7 +215,7 @@ export class DemoJob {
       )
       .sort((one, other) => other.answer - one.answer);
     if (!near) throw new Error(`${spec.tag} is read nowhere`);
-    const changeMmS = 0.8 * Math.max(1.5, size(found[near.index] ?? { re: 0, im: 0 }));
+    const changeMmS = 0.6 * Math.max(1.5, size(found[near.index] ?? { re: 0, im: 0 }));
     return Math.max(2, Math.round(changeMmS / near.answer / (spec.planes[plane]?.radiusMm ?? 1)));
   }
 
