@@ -72,3 +72,31 @@ export type LastJobDto = {
   sameSetup: boolean;
   events: { at: string; kind: string; text: string }[];
 };
+
+/** A plane as asked for and as recorded, as one weight at the plane's radius, against rotation. */
+export type AsFittedPlane = {
+  planeName: string;
+  askedG: number;
+  askedDeg: number;
+  fittedG: number;
+  fittedDeg: number;
+  isFar: boolean;
+};
+
+export type AsFittedDto = {
+  planes: AsFittedPlane[];
+  /** What the points should read with everything as recorded. */
+  expected: { label: string; amplitude: number; lagDeg: number }[];
+};
+
+export type TrialProposalDto = {
+  planeId: number;
+  massG: number;
+  basis: string;
+  forceN: number;
+  forcePctOfLoad: number;
+  angleDeg: number;
+  expectedChange: number | null;
+  /** Where the coefficient book expects the weight to lower the reading; null without a book. */
+  loweringDeg: number | null;
+};

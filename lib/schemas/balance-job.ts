@@ -1,9 +1,11 @@
 import type {
+  AsFittedDto,
   BookOfferDto,
-  ReuseDto,
-  PlacementDto,
-  TrialComparisonDto,
   LastJobDto,
+  PlacementDto,
+  ReuseDto,
+  TrialComparisonDto,
+  TrialProposalDto,
 } from './balance-job-parts';
 import type { Step } from '@/lib/domain/balance-job/next-step';
 import type { RepeatTest } from '@/lib/domain/balancing/repeat-test';
@@ -206,34 +208,6 @@ export type CheckVerdict = {
 export type SlipExplanation = Pick<SlipTest, 'slip' | 'words' | 'miss' | 'inside'> & {
   /** A person may say that this is what happened. */
   confirmable: boolean;
-};
-
-/** A plane as asked for and as recorded, as one weight at the plane's radius, against rotation. */
-export type AsFittedPlane = {
-  planeName: string;
-  askedG: number;
-  askedDeg: number;
-  fittedG: number;
-  fittedDeg: number;
-  isFar: boolean;
-};
-
-export type AsFittedDto = {
-  planes: AsFittedPlane[];
-  /** What the points should read with everything as recorded. */
-  expected: { label: string; amplitude: number; lagDeg: number }[];
-};
-
-export type TrialProposalDto = {
-  planeId: number;
-  massG: number;
-  basis: string;
-  forceN: number;
-  forcePctOfLoad: number;
-  angleDeg: number;
-  expectedChange: number | null;
-  /** Where the coefficient book expects the weight to lower the reading; null without a book. */
-  loweringDeg: number | null;
 };
 
 export type BalanceJobDto = {

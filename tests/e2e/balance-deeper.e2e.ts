@@ -21,7 +21,7 @@ import {
   takeAnswer,
   typeFound,
 } from './balance-journey';
-import { enterMachine, type TypedMachine } from './machine-journey';
+import { enteredMachine } from './machine-journey';
 import { signInAs } from './people';
 
 // Scenarios S04 and S05: invented plant; expected values computed by an independent implementation.
@@ -35,18 +35,9 @@ beforeAll(async () => {
 
 afterAll(() => browser.close());
 
-async function entered(machine: TypedMachine): Promise<string> {
-  const { page, close } = await openPage(browser);
-  await signInAs(page, 'engineer');
-  const tag = `${machine.tag}-${Date.now() % 1_000_000}`;
-  const address = await enterMachine(page, { ...machine, tag });
-  await close();
-  return address;
-}
-
 describe('the second balance of a rotor', () => {
   it('needs no trial run: the first weight fitted is the correction', async () => {
-    const address = await entered({
+    const address = await enteredMachine(browser, {
       tag: 'RM',
       speeds: { lowest: 1465, highest: 1495, usual: 1485 },
       massKg: 300,
@@ -118,7 +109,7 @@ describe('seven blades with limits, two of them used already', () => {
   it('names blades and pieces with the room that is left', async () => {
     const [wheel] = S04.machine.planes;
     if (!wheel) throw new Error('no wheel');
-    const address = await entered({
+    const address = await enteredMachine(browser, {
       tag: 'AV',
       speeds: { lowest: 960, highest: 1000, usual: S04.machine.speed_r_min },
       massKg: S04.machine.rotor_mass_kg,
@@ -205,7 +196,7 @@ function readingsWith(hung: readonly Hung[]) {
 
 describe('two planes, degrees counted with rotation and typed as against it', () => {
   it('is found by the slip test after the check run, and put right by newer records', async () => {
-    const address = await entered({
+    const address = await enteredMachine(browser, {
       tag: 'SW',
       speeds: { lowest: 950, highest: 1010, usual: 990 },
       massKg: 640,

@@ -19,7 +19,7 @@ import {
   typeWeight,
   takeAnswer,
 } from './balance-journey';
-import { enterMachine, type TypedMachine } from './machine-journey';
+import { enteredMachine } from './machine-journey';
 import { signInAs } from './people';
 
 // Scenarios S01, S02 and S03: invented plant; expected values computed by an independent implementation.
@@ -33,18 +33,9 @@ beforeAll(async () => {
 
 afterAll(() => browser.close());
 
-async function entered(machine: TypedMachine): Promise<string> {
-  const { page, close } = await openPage(browser);
-  await signInAs(page, 'engineer');
-  const tag = `${machine.tag}-${Date.now() % 1_000_000}`;
-  const address = await enterMachine(page, { ...machine, tag });
-  await close();
-  return address;
-}
-
 describe('S01: one plane, three base runs, the trial taken off, one trim', () => {
   it('gives answer, trim and ledger through the screens', async () => {
-    const address = await entered({
+    const address = await enteredMachine(browser, {
       tag: 'EF',
       speeds: { lowest: 1460, highest: 1500, usual: 1480 },
       massKg: 210,
@@ -104,7 +95,7 @@ describe('S02: two planes, both trials taken off', () => {
   let address: string;
 
   beforeAll(async () => {
-    address = await entered({
+    address = await enteredMachine(browser, {
       tag: 'KX',
       speeds: { lowest: 950, highest: 1010, usual: 990 },
       massKg: 640,
@@ -171,7 +162,7 @@ describe('S02: two planes, both trials taken off', () => {
 
 describe('S03: both trial weights stay on', () => {
   it('says what to add to what is on it now, and the total from as found', async () => {
-    const address = await entered({
+    const address = await enteredMachine(browser, {
       tag: 'CB',
       speeds: { lowest: 1470, highest: 1510, usual: 1490 },
       massKg: 420,

@@ -1,6 +1,8 @@
-import type { Page } from 'playwright-core';
+import type { Browser, Page } from 'playwright-core';
 import { routes } from '@/lib/routes';
+import { openPage } from '@/tests/support/browser-page';
 import { baseUrl } from '@/tests/support/chromium';
+import { signInAs } from './people';
 
 export type TypedMachine = {
   tag: string;
@@ -16,6 +18,16 @@ export type TypedMachine = {
   }[];
   grade?: number;
 };
+
+/** A machine of its own, entered by an engineer; the address of its page. */
+export async function enteredMachine(browser: Browser, machine: TypedMachine): Promise<string> {
+  const { page, close } = await openPage(browser);
+  await signInAs(page, 'engineer');
+  const tag = `${machine.tag}-${Date.now() % 1_000_000}`;
+  const address = await enterMachine(page, { ...machine, tag });
+  await close();
+  return address;
+}
 
 /** Enters a fan between bearings through its form and waits for its page; the address of that page. */
 export async function enterMachine(page: Page, machine: TypedMachine): Promise<string> {

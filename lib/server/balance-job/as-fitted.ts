@@ -4,7 +4,7 @@ import type { WeightOnRotor } from '@/entities/balance-job';
 import { angleDeg, fromPolar, size, subtract, sum } from '@/lib/domain/complex';
 import { predictRun } from '@/lib/domain/balancing/predict-run';
 import { solveJob } from '@/lib/domain/balancing/solve-job';
-import type { AsFittedDto, AsFittedPlane } from '@/lib/schemas/balance-job';
+import type { AsFittedDto, AsFittedPlane } from '@/lib/schemas/balance-job-parts';
 import { weightsNow } from './job-input';
 import type { LoadedJob } from './load-job';
 import { changedOnRotor } from './weights-on-rotor';

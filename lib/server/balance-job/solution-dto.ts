@@ -4,7 +4,8 @@ import type { JobSolution } from '@/lib/domain/balancing/job-solution';
 import { knownResponse } from '@/lib/domain/balancing/known-response';
 import type { ReusableBook } from '@/lib/domain/balancing/reusable-coefficients';
 import { proposeTrial } from '@/lib/domain/balancing/trial-proposal';
-import type { ToleranceDto, TrialCheck, TrialProposalDto } from '@/lib/schemas/balance-job';
+import type { ToleranceDto, TrialCheck } from '@/lib/schemas/balance-job';
+import type { TrialProposalDto } from '@/lib/schemas/balance-job-parts';
 import { baseRepeats } from './base-repeats';
 import type { LoadedJob } from './load-job';
 
