@@ -63,6 +63,11 @@ export default async function BalanceJobPage({ params }: Props) {
               Your role reads this job; technicians and engineers record it.
             </Notice>
           )}
+          {!open && job.state !== 'signed' && job.closingNote !== null && (
+            <Notice kind="info" title={`Ended: ${job.state}`}>
+              <span className="whitespace-pre-line">{job.closingNote}</span>
+            </Notice>
+          )}
           <Panel title="Run sheet">
             <RunsTable job={job} may={may} />
           </Panel>

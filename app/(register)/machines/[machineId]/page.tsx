@@ -34,6 +34,7 @@ export default async function MachinePage({ params }: Props) {
     { label: machine.areaName },
     { label: machine.tag },
   ];
+  const openJob = machine.jobs.find(({ closedAt }) => closedAt === null);
   return (
     <>
       <PageHead
@@ -42,10 +43,17 @@ export default async function MachinePage({ params }: Props) {
         note={machine.aliases.length > 0 ? `earlier: ${machine.aliases.join(', ')}` : undefined}
         actions={
           <>
-            {may('balanceJob:open') && machine.state === 'active' && (
-              <LinkButton href={routes.newBalanceJob(machine.id)} variant="primary">
-                Open a balance job
+            {openJob ? (
+              <LinkButton href={routes.balanceJob(openJob.id)} variant="primary">
+                Go on with job {openJob.number}
               </LinkButton>
+            ) : (
+              may('balanceJob:open') &&
+              machine.state === 'active' && (
+                <LinkButton href={routes.newBalanceJob(machine.id)} variant="primary">
+                  Open a balance job
+                </LinkButton>
+              )
             )}
             <LinkButton href={routes.machineHistory(machine.id)}>Balance history</LinkButton>
             {may('register:edit') && (
