@@ -124,8 +124,15 @@ function lowered(grade: CoefficientGrade): CoefficientGrade {
   return grade === 'good' ? 'with care' : 'not for reuse';
 }
 
-function onePerJob(estimates: readonly BookEstimate[]): BookEstimate[] {
-  const best = new Map<string, BookEstimate>();
+/**
+ * One estimate for each job, plane and point: the fit over all runs of a job goes before its trials, which
+ * may have been put right since.
+ * Example: a job's trial and its fit over all runs count as the latter alone.
+ */
+export function onePerJob<
+  Estimate extends Pick<BookEstimate, 'jobId' | 'planeId' | 'pointId' | 'source'>,
+>(estimates: readonly Estimate[]): Estimate[] {
+  const best = new Map<string, Estimate>();
   for (const estimate of estimates) {
     const key = [estimate.jobId, estimate.planeId, estimate.pointId].join(' ');
     const known = best.get(key);

@@ -3,6 +3,7 @@ import type { EntityManager, Loaded } from '@mikro-orm/postgresql';
 import type { Coefficient } from '@/entities/answer';
 import type { Plane } from '@/entities/rotor';
 import { summariseCoefficient } from '@/lib/domain/balancing/coefficient-book';
+import { onePerJob } from '@/lib/domain/balancing/reusable-coefficients';
 import { ledgerSum } from '@/lib/domain/balancing/weights-ledger';
 import { angleDeg, size } from '@/lib/domain/complex';
 import type { CoefficientLine, LedgerPlane } from '@/lib/schemas/register';
@@ -34,7 +35,11 @@ type Estimate = Loaded<Coefficient, 'plane' | 'point'>;
 /** Estimates of one plane, point, set-up and unit as one line with its spread and grade. */
 export function coefficientLines(estimates: readonly Estimate[]): CoefficientLine[] {
   const groups = new Map<string, Estimate[]>();
-  for (const estimate of estimates) {
+  const known = estimates.map((estimate) => {
+    const { job, plane, point, source } = estimate;
+    return { jobId: job.id, planeId: plane.id, pointId: point.id, source, estimate };
+  });
+  for (const { estimate } of onePerJob(known)) {
     const { plane, point, setup, unit } = estimate;
     const key = [plane.id, point.id, setup.id, unit].join(' ');
     groups.set(key, [...(groups.get(key) ?? []), estimate]);
